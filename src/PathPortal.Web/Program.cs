@@ -1,0 +1,3 @@
+var app = WebApplication.CreateBuilder(args).Build();
+app.MapGet("/", () => "PathPortal");
+await app.RunAsync();

@@ -1,0 +1,2 @@
+var builder = Host.CreateApplicationBuilder(args);
+await builder.Build().RunAsync();
