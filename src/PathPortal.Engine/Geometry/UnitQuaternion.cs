@@ -1,0 +1,46 @@
+namespace PathPortal.Engine.Geometry;
+
+/// <summary>
+/// A rotation as a unit quaternion, scalar first: R = (w, x, y, z) and its negative are the same rotation.
+/// Immutable. Built only through factories, so the norm is 1 to rounding.
+/// </summary>
+public readonly record struct UnitQuaternion
+{
+    private UnitQuaternion(double w, double x, double y, double z) => (W, X, Y, Z) = (w, x, y, z);
+
+    public static UnitQuaternion Identity => new(1, 0, 0, 0);
+
+    public double W { get; }
+
+    public double X { get; }
+
+    public double Y { get; }
+
+    public double Z { get; }
+
+    /// <summary>The rotation with these components after scaling them to norm 1.</summary>
+    /// <exception cref="ArgumentException">The components are all zero or not finite.</exception>
+    public static UnitQuaternion FromComponents(double w, double x, double y, double z)
+    {
+        var norm = Math.Sqrt(w * w + x * x + y * y + z * z);
+        return norm > 0 && double.IsFinite(norm)
+            ? new(w / norm, x / norm, y / norm, z / norm)
+            : throw new ArgumentException($"The quaternion ({w}, {x}, {y}, {z}) has no direction.");
+    }
+
+    /// <summary>The inverse rotation.</summary>
+    public UnitQuaternion Conjugate() => new(W, -X, -Y, -Z);
+
+    /// <summary>The other sign: the same rotation.</summary>
+    public UnitQuaternion Negated() => new(-W, -X, -Y, -Z);
+
+    /// <summary>Four-dimensional scalar product, cos of half the angle between the two rotations up to sign.</summary>
+    public double Dot(UnitQuaternion other) => W * other.W + X * other.X + Y * other.Y + Z * other.Z;
+
+    /// <summary>Hamilton product: rotation b first, then a, when applied to column vectors.</summary>
+    public static UnitQuaternion operator *(UnitQuaternion a, UnitQuaternion b) => FromComponents(
+        a.W * b.W - a.X * b.X - a.Y * b.Y - a.Z * b.Z,
+        a.W * b.X + a.X * b.W + a.Y * b.Z - a.Z * b.Y,
+        a.W * b.Y - a.X * b.Z + a.Y * b.W + a.Z * b.X,
+        a.W * b.Z + a.X * b.Y - a.Y * b.X + a.Z * b.W);
+}
