@@ -1,3 +1,45 @@
-var app = WebApplication.CreateBuilder(args).Build();
-app.MapGet("/", () => "PathPortal");
+using Microsoft.AspNetCore.ResponseCompression;
+using MudBlazor.Services;
+using PathPortal.Web.Hosting;
+using PathPortal.Web.Layout;
+
+var builder = WebApplication.CreateBuilder(args);
+var services = builder.Services;
+
+services.AddSingleton(TimeProvider.System);
+services.AddHttpContextAccessor();
+services.AddRazorComponents().AddInteractiveServerComponents();
+services.AddCascadingAuthenticationState();
+services.AddMudServices();
+services.AddAntiforgery(options => options.Cookie.SecurePolicy = CookieSecurePolicy.SameAsRequest);
+services.AddPortalRateLimits(builder.Configuration);
+services.AddResponseCompression(options =>
+{
+    // Files only: pages carry tokens, and compressing those beside text a stranger can choose would leak them.
+    options.EnableForHttps = true;
+    options.MimeTypes = ["text/css", "text/javascript", "application/javascript", "image/svg+xml", "application/vnd.pathportal.samples"];
+    options.Providers.Add<BrotliCompressionProvider>();
+    options.Providers.Add<GzipCompressionProvider>();
+});
+services.AddAuthentication();
+services.AddAuthorization();
+
+var app = builder.Build();
+
+app.UseSecurityHeaders();
+app.UseResponseCompression();
+app.UseExceptionHandler("/error", createScopeForErrors: true);
+app.UseStatusCodePagesWithReExecute("/not-found");
+app.UseRouting();
+app.UseAuthentication();
+app.UseAuthorization();
+app.UseRateLimiter();
+app.UseAntiforgery();
+
+app.MapStaticAssets().AllowAnonymous();
+app.MapPreferences();
+app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
+
 await app.RunAsync();
+
+public sealed partial class Program;

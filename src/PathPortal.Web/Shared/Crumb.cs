@@ -1,0 +1,3 @@
+namespace PathPortal.Web.Shared;
+
+public sealed record Crumb(string Text, string Href);
