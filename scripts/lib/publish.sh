@@ -16,8 +16,9 @@ source_digest() {
 # publish_portal LOG  Sets `published` and holds the folder (descriptor 8) against being cleaned away by a later build.
 publish_portal() {
     local log=$1 folder
-    mkdir -p "$PUBLISH_ROOT" 2>/dev/null && [[ -w $PUBLISH_ROOT ]] ||
+    if ! mkdir -p "$PUBLISH_ROOT" 2>/dev/null || [[ ! -w $PUBLISH_ROOT ]]; then
         die "the build goes to $PUBLISH_ROOT, which $(id -un) may not write to; use a clone of your own"
+    fi
     exec 7>"$PUBLISH_ROOT/.lock"
     flock -n 7 || { say "Waiting for another build of this clone"; flock 7; }
     published=$PUBLISH_ROOT/$(source_digest)
