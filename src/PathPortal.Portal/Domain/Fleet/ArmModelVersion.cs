@@ -1,0 +1,38 @@
+namespace PathPortal.Portal.Domain.Fleet;
+
+/// <summary>One version of an arm model: kinematic chain and limits. Never changes.</summary>
+public sealed class ArmModelVersion
+{
+    internal ArmModelVersion(Guid armModelId, int number, StoredDocument document, string note, Guid by, DateTimeOffset at)
+    {
+        Id = Guid.CreateVersion7(at);
+        ArmModelId = armModelId;
+        Number = number;
+        Json = document.Json;
+        Sha256 = document.Sha256;
+        Note = note;
+        CreatedBy = by;
+        CreatedAt = at;
+    }
+
+    private ArmModelVersion()
+    {
+    }
+
+    public Guid Id { get; private set; }
+
+    public Guid ArmModelId { get; private set; }
+
+    /// <summary>From 1.</summary>
+    public int Number { get; private set; }
+
+    public string Json { get; private set; } = "";
+
+    public string Sha256 { get; private set; } = "";
+
+    public string Note { get; private set; } = "";
+
+    public Guid CreatedBy { get; private set; }
+
+    public DateTimeOffset CreatedAt { get; private set; }
+}
