@@ -1,5 +1,8 @@
 using Microsoft.AspNetCore.ResponseCompression;
 using MudBlazor.Services;
+using PathPortal.Portal.Data;
+using PathPortal.Portal.Data.Queries;
+using PathPortal.Web.Features.SignIn;
 using PathPortal.Web.Hosting;
 using PathPortal.Web.Layout;
 
@@ -21,23 +24,29 @@ services.AddResponseCompression(options =>
     options.Providers.Add<BrotliCompressionProvider>();
     options.Providers.Add<GzipCompressionProvider>();
 });
-services.AddAuthentication();
-services.AddAuthorization();
+services.AddPortalData(builder.Configuration.GetConnectionString("Portal")
+    ?? throw new InvalidOperationException("No database is configured: set the connection string named Portal (ConnectionStrings__Portal)."));
+services.AddPortalSignIn();
+services.AddScoped<CurrentActor>();
+services.AddScoped<SignInHandler>();
+services.AddSingleton<FleetQuery>();
+services.AddSingleton<WaitingQuery>();
 
 var app = builder.Build();
 
 app.UseSecurityHeaders();
 app.UseResponseCompression();
-app.UseExceptionHandler("/error", createScopeForErrors: true);
-app.UseStatusCodePagesWithReExecute("/not-found");
+app.UseFailurePages();
 app.UseRouting();
 app.UseAuthentication();
 app.UseAuthorization();
 app.UseRateLimiter();
 app.UseAntiforgery();
 
-app.MapStaticAssets().AllowAnonymous();
+app.MapStaticAssets().AllowAnonymous().WithMetadata(new StaticFileMark());
+app.MapHealth();
 app.MapPreferences();
+app.MapSignOut();
 app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
 
 await app.RunAsync();

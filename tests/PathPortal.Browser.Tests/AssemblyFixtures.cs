@@ -1,0 +1,3 @@
+using PathPortal.Browser.Tests.Support;
+
+[assembly: AssemblyFixture(typeof(Chromium))]
