@@ -6,7 +6,7 @@ namespace PathPortal.Portal.Data;
 public sealed class PortalSchema(NpgsqlDataSource source)
 {
     /// <summary>The newest migration. Change it with every migration; a test compares.</summary>
-    public const string Expected = "20261201122051_Initial";
+    public const string Expected = "20261201122718_RunBatches";
 
     /// <summary>Null when the database is current, else why not.</summary>
     public async Task<string?> WhyNotReadyAsync(CancellationToken cancellation = default)

@@ -28,6 +28,7 @@ internal sealed class RunMapping :
         builder.Ignore(r => r.IsFinished);
         builder.HasIndex(r => new { r.PlantId, r.Digest }).IsUnique();
         builder.HasIndex(r => r.QueuedAt).HasFilter("state IN ('Queued', 'Running')");
+        builder.HasIndex(r => r.BatchId).HasFilter("state IN ('Queued', 'Running')");
         builder.HasOne<Plant>().WithMany().HasForeignKey(r => r.PlantId).OnDelete(DeleteBehavior.Restrict);
     }
 

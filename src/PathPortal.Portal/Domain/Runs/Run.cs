@@ -41,7 +41,11 @@ public sealed class Run
     /// <summary>The worker that computes or computed it.</summary>
     public string? WorkerName { get; private set; }
 
+    /// <summary>How often a worker took it; a worker's result counts only while this is still the number it took it under.</summary>
     public int Attempts { get; private set; }
+
+    /// <summary>The job that is to compute it, together with the other runs of the batch; null before it was given to one.</summary>
+    public Guid? BatchId { get; private set; }
 
     public DateTimeOffset QueuedAt { get; private set; }
 
@@ -70,6 +74,13 @@ public sealed class Run
     public uint Version { get; private set; }
 
     public bool IsFinished => State is RunState.Done or RunState.Failed;
+
+    /// <summary>Gives the run to a job; the one it had before finds it no longer.</summary>
+    public void JoinBatch(Guid batchId)
+    {
+        if (!IsFinished)
+            BatchId = batchId;
+    }
 
     /// <summary>Takes the run for a worker; false when it is finished already. A running one is taken over: its worker was lost.</summary>
     public bool Start(string workerName, DateTimeOffset at)
