@@ -19,6 +19,21 @@ public readonly record struct RotationMatrix(
     /// <summary>z axis of B in axes of A.</summary>
     public Vector3D AxisZ => new(R13, R23, R33);
 
+    /// <summary>The element in a row and column from 0.</summary>
+    public double this[int row, int column] => (3 * row + column) switch
+    {
+        0 => R11,
+        1 => R12,
+        2 => R13,
+        3 => R21,
+        4 => R22,
+        5 => R23,
+        6 => R31,
+        7 => R32,
+        8 => R33,
+        _ => throw new ArgumentOutOfRangeException(nameof(row), $"({row}, {column}) is not in a 3×3 matrix."),
+    };
+
     public static RotationMatrix FromAxes(Vector3D x, Vector3D y, Vector3D z) =>
         new(x.X, y.X, z.X, x.Y, y.Y, z.Y, x.Z, y.Z, z.Z);
 
@@ -32,6 +47,15 @@ public readonly record struct RotationMatrix(
             2 * (xy + wz), 1 - 2 * (xx + zz), 2 * (yz - wx),
             2 * (xz - wy), 2 * (yz + wx), 1 - 2 * (xx + yy));
     }
+
+    /// <summary>Turn about x.</summary>
+    public static RotationMatrix AboutX(Angle angle) => new(1, 0, 0, 0, angle.Cos, -angle.Sin, 0, angle.Sin, angle.Cos);
+
+    /// <summary>Turn about y.</summary>
+    public static RotationMatrix AboutY(Angle angle) => new(angle.Cos, 0, angle.Sin, 0, 1, 0, -angle.Sin, 0, angle.Cos);
+
+    /// <summary>Turn about z.</summary>
+    public static RotationMatrix AboutZ(Angle angle) => new(angle.Cos, -angle.Sin, 0, angle.Sin, angle.Cos, 0, 0, 0, 1);
 
     public static RotationMatrix operator *(RotationMatrix a, RotationMatrix b) =>
         FromAxes(a * b.AxisX, a * b.AxisY, a * b.AxisZ);

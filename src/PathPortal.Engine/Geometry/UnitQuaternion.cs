@@ -28,6 +28,28 @@ public readonly record struct UnitQuaternion
             : throw new ArgumentException($"The quaternion ({w}, {x}, {y}, {z}) has no direction.");
     }
 
+    /// <summary>
+    /// The quaternion of a rotation matrix. Of the four equal forms the one with the largest divisor is taken, so that no angle, 180° included,
+    /// loses digits (Shepperd 1978). The matrix is taken as orthonormal.
+    /// </summary>
+    public static UnitQuaternion FromMatrix(RotationMatrix r)
+    {
+        var trace = r.R11 + r.R22 + r.R33;
+        if (trace >= r.R11 && trace >= r.R22 && trace >= r.R33)
+        {
+            return FromComponents(1 + trace, r.R32 - r.R23, r.R13 - r.R31, r.R21 - r.R12);
+        }
+
+        if (r.R11 >= r.R22 && r.R11 >= r.R33)
+        {
+            return FromComponents(r.R32 - r.R23, 1 + r.R11 - r.R22 - r.R33, r.R12 + r.R21, r.R13 + r.R31);
+        }
+
+        return r.R22 >= r.R33
+            ? FromComponents(r.R13 - r.R31, r.R12 + r.R21, 1 - r.R11 + r.R22 - r.R33, r.R23 + r.R32)
+            : FromComponents(r.R21 - r.R12, r.R13 + r.R31, r.R23 + r.R32, 1 - r.R11 - r.R22 + r.R33);
+    }
+
     /// <summary>The inverse rotation.</summary>
     public UnitQuaternion Conjugate() => new(W, -X, -Y, -Z);
 

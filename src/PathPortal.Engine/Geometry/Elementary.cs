@@ -1,0 +1,9 @@
+namespace PathPortal.Engine.Geometry;
+
+/// <summary>The one place from which scalar code takes elementary functions.</summary>
+internal static class Elementary
+{
+    public static (double Sin, double Cos) SinCos(double angle) => Math.SinCos(angle);
+
+    public static double Atan2(double y, double x) => Math.Atan2(y, x);
+}
