@@ -15,7 +15,10 @@ public sealed record Waypoint
     /// <summary>Tool centre point in W (m).</summary>
     public required Vector3D Position { get; init; }
 
-    /// <summary>Tool orientation R_WT. For a source that gives only the tool axis: the shortest turn from W's z axis to it.</summary>
+    /// <summary>
+    /// Tool orientation R_WT. For a source that gives only the tool axis: at the first point the shortest turn from W's z axis to it, then the
+    /// shortest turn on from the point before, so that nothing spins about the axis.
+    /// </summary>
     public required UnitQuaternion Orientation { get; init; }
 
     /// <summary>Motion of the segment that ends here. Ignored at the first waypoint.</summary>

@@ -12,6 +12,9 @@ internal sealed class ProblemList
 
     public int Count { get; private set; }
 
+    /// <summary>Reading stopped before the end, so there may be more problems than were counted.</summary>
+    public bool Stopped { get; private set; }
+
     public int NotListed => Count - _problems.Count;
 
     public ImmutableArray<FormatProblem> Problems => _problems.ToImmutable();
@@ -30,6 +33,8 @@ internal sealed class ProblemList
 
     public void Add(FormatProblem problem) =>
         Add(problem.Line, problem.Column, problem.Field, problem.Value, problem.Expected, problem.Message);
+
+    public void Stop() => Stopped = true;
 
     public void Remark(int line, int column, string field, string message)
     {

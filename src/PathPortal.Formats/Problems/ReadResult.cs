@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Diagnostics.CodeAnalysis;
+using System.Globalization;
 
 namespace PathPortal.Formats.Problems;
 
@@ -16,6 +17,9 @@ public sealed class ReadResult<T>
     /// <summary>How many more problems there are than are listed.</summary>
     public int ProblemsNotListed { get; private init; }
 
+    /// <summary>Reading stopped before the end of the source: there may be more problems than are counted.</summary>
+    public bool Stopped { get; private init; }
+
     /// <summary>What a reader should know about an accepted file.</summary>
     public ImmutableArray<FormatRemark> Remarks { get; private init; } = [];
 
@@ -25,12 +29,12 @@ public sealed class ReadResult<T>
     /// <summary>“and N more” when not every problem is listed, else empty.</summary>
     public string MoreText => ProblemsNotListed == 0
         ? ""
-        : string.Create(System.Globalization.CultureInfo.InvariantCulture, $"and {ProblemsNotListed} more");
+        : string.Create(CultureInfo.InvariantCulture, $"and {(Stopped ? "at least " : "")}{ProblemsNotListed} more");
 
     internal static ReadResult<T> Of(T value, ProblemList list) => list.Any
         ? Refused(list)
         : new() { Value = value, Remarks = list.Remarks };
 
     internal static ReadResult<T> Refused(ProblemList list) =>
-        new() { Problems = list.Problems, ProblemsNotListed = list.NotListed };
+        new() { Problems = list.Problems, ProblemsNotListed = list.NotListed, Stopped = list.Stopped };
 }
