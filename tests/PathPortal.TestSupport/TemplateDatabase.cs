@@ -1,5 +1,6 @@
 using System.Reflection;
 using Npgsql;
+using PathPortal.Portal.Data.Provisioning;
 
 namespace PathPortal.TestSupport;
 
@@ -28,9 +29,11 @@ internal static class TemplateDatabase
 
         // Migrated under another name first: a template half made by a process that died must not be found by the next.
         var draft = name + "_draft";
-        await new TestRoles(server).EnsureOwnerAsync(superuser);
+        var roles = new TestRoles(server);
+        await roles.EnsureOwnerAsync(superuser);
         await ExecuteAsync(superuser, $"DROP DATABASE IF EXISTS {draft} WITH (FORCE)");
         await ExecuteAsync(superuser, $"CREATE DATABASE {draft} OWNER pathportal_owner");
+        await new DatabaseMigrator(new(roles.OwnerOf(draft), roles.Web(draft), roles.Worker(draft))).RunAsync();
         await ExecuteAsync(superuser, $"ALTER DATABASE {draft} RENAME TO {name}");
         return name;
     }
