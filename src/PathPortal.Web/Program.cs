@@ -2,6 +2,7 @@ using Microsoft.AspNetCore.ResponseCompression;
 using MudBlazor.Services;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Data.Queries;
+using PathPortal.Web.Features.Programs;
 using PathPortal.Web.Features.SignIn;
 using PathPortal.Web.Hosting;
 using PathPortal.Web.Layout;
@@ -31,6 +32,7 @@ services.AddScoped<CurrentActor>();
 services.AddScoped<SignInHandler>();
 services.AddSingleton<FleetQuery>();
 services.AddSingleton<WaitingQuery>();
+services.AddSingleton<ProgramQuery>();
 
 var app = builder.Build();
 
@@ -47,6 +49,7 @@ app.MapStaticAssets().AllowAnonymous().WithMetadata(new StaticFileMark());
 app.MapHealth();
 app.MapPreferences();
 app.MapSignOut();
+app.MapRevisionCells();
 app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
 
 await app.RunAsync();
