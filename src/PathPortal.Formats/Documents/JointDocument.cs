@@ -12,10 +12,10 @@ public sealed record JointDocument
     /// <summary>+1 or −1: sense of the controller's joint value.</summary>
     public int Sign { get; set; } = 1;
 
-    /// <summary>θ of the row; for a revolute joint the zero offset that is added to sign · value.</summary>
+    /// <summary>θ of the row, constant; the motion of a revolute joint, sign · value, adds to it.</summary>
     public double ThetaDeg { get; set; }
 
-    /// <summary>d of the row; for a prismatic joint the zero offset that is added to sign · value.</summary>
+    /// <summary>d of the row, constant; the motion of a prismatic joint, sign · value, adds to it.</summary>
     public double DMm { get; set; }
 
     /// <summary>a of the row; with modified rows that of the link before.</summary>

@@ -1,4 +1,6 @@
+using System.Collections.Frozen;
 using System.Collections.Immutable;
+using PathPortal.Engine.Geometry;
 
 namespace PathPortal.Formats.Documents;
 
@@ -12,15 +14,16 @@ public static class OrientationConvention
 
     public const string Quaternion = "quaternion";
 
-    private static readonly string[] Sequences = ["xyz", "xzy", "yxz", "yzx", "zxy", "zyx", "xyx", "xzx", "yxy", "yzy", "zxz", "zyz"];
+    private static readonly FrozenDictionary<string, EulerConvention> ByWord =
+        Enum.GetValues<EulerConvention>().ToFrozenDictionary(Documents.Words.Of, StringComparer.Ordinal);
 
     /// <summary>Every convention by angles, <see cref="Default"/> first.</summary>
-    public static ImmutableArray<string> Angles { get; } = [.. Sequences.Select(s => "fixed_" + s), .. Sequences.Select(s => "moving_" + s)];
+    public static ImmutableArray<string> Angles { get; } = [.. Enum.GetValues<EulerConvention>().Select(Documents.Words.Of)];
 
     /// <summary>Every word a document may use.</summary>
     public static ImmutableArray<string> Words { get; } = [Quaternion, .. Angles];
 
-    /// <summary>The convention in words for people, such as “fixed axes x, y, z (roll, pitch, yaw)”.</summary>
+    /// <summary>The convention in words for people, such as “about fixed axes x, y, z (roll, pitch, yaw)”.</summary>
     public static string Describe(string convention)
     {
         ArgumentNullException.ThrowIfNull(convention);
@@ -34,4 +37,6 @@ public static class OrientationConvention
             ? $"about fixed axes {letters}" + (convention == Default ? " (roll, pitch, yaw)" : "")
             : $"about moving axes {letters}";
     }
+
+    internal static EulerConvention ToEuler(string convention) => ByWord[convention];
 }

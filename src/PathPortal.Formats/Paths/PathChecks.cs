@@ -1,4 +1,5 @@
 using System.Globalization;
+using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Paths;
 using PathPortal.Formats.Problems;
 
@@ -52,7 +53,7 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
 
         var before = rows.Waypoints[i - 1];
         var still = (point.Position - before.Position).Norm <= SamePlaceM
-            && Turn(before, point) <= SameTurnRad
+            && RotationVector.AngleBetween(before.Orientation, point.Orientation) <= SameTurnRad
             && (point.Motion == MotionKind.Straight || point.Joints is null);
         if (still)
         {
@@ -142,14 +143,6 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
         {
             Remark(i, _leadInAt, "The lead-in is as long as the whole process section: nothing of it will be judged.");
         }
-    }
-
-    // Angle between two orientations; the chord keeps its digits where the arc cosine loses them.
-    private static double Turn(Waypoint a, Waypoint b)
-    {
-        var (p, q) = (a.Orientation, b.Orientation.Dot(a.Orientation) < 0 ? b.Orientation.Negated() : b.Orientation);
-        var (w, x, y, z) = (p.W - q.W, p.X - q.X, p.Y - q.Y, p.Z - q.Z);
-        return 4 * Math.Asin(Math.Min(1, Math.Sqrt(w * w + x * x + y * y + z * z) / 2));
     }
 
     private void Wrong(int i, int at, string expected, string message)

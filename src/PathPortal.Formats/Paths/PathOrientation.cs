@@ -124,8 +124,10 @@ internal sealed class PathOrientation(CsvRows rows, PathLayout layout, ProblemLi
             WholeAngles &= size == Math.Floor(size);
         }
 
-        var scale = column.Unit == "deg" ? Conversion.RadPerDeg : 1;
-        return Conversion.FromAngles(column.Convention, scale * _values[0], scale * _values[1], scale * _values[2]);
+        var convention = OrientationConvention.ToEuler(column.Convention);
+        return UnitQuaternion.FromMatrix(column.Unit == "deg"
+            ? EulerAngles.ToMatrix(convention, Angle.FromDegrees(_values[0]), Angle.FromDegrees(_values[1]), Angle.FromDegrees(_values[2]))
+            : EulerAngles.ToMatrix(convention, Angle.FromRadians(_values[0]), Angle.FromRadians(_values[1]), Angle.FromRadians(_values[2])));
     }
 
     private UnitQuaternion FromAxis(bool first)
@@ -140,8 +142,8 @@ internal sealed class PathOrientation(CsvRows rows, PathLayout layout, ProblemLi
         // The tool frame's z axis points from the holder to the tip.
         axis = layout.OrientationKind == PathQuantity.AxisToHolder ? -axis.Normalised() : axis.Normalised();
         var turned = first || _axis == default
-            ? AxisTurn.Between(Vector3D.UnitZ, axis)
-            : _axis == axis ? _last : AxisTurn.Between(_axis, axis) * _last;
+            ? ToolAxisFrame.ShortestTurn(Vector3D.UnitZ, axis)
+            : _axis == axis ? _last : ToolAxisFrame.ShortestTurn(_axis, axis) * _last;
         _axis = axis;
         return turned;
     }
