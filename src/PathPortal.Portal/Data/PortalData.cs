@@ -2,7 +2,9 @@ using Microsoft.AspNetCore.Identity;
 using Microsoft.EntityFrameworkCore;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.DependencyInjection.Extensions;
+using Microsoft.Extensions.Options;
 using Npgsql;
+using PathPortal.Portal.Domain.People;
 
 namespace PathPortal.Portal.Data;
 
@@ -19,6 +21,7 @@ public static class PortalData
         services.AddSingleton(_ => OpenDataSource(connectionString));
         services.AddDbContextFactory<PortalDbContext>((provider, options) => Configure(options, provider.GetRequiredService<NpgsqlDataSource>()));
         services.Configure<IdentityOptions>(ConfigureIdentity);
+        services.Configure<PasswordHasherOptions>(ConfigureHasher);
         services.AddSingleton<PortalDb>();
         services.AddSingleton<PortalSchema>();
         return services;
@@ -58,6 +61,17 @@ public static class PortalData
         options.Lockout.MaxFailedAccessAttempts = 10;
         options.Lockout.DefaultLockoutTimeSpan = TimeSpan.FromMinutes(5);
     }
+
+    /// <summary>The hasher every process uses, for commands that sign nobody in.</summary>
+    public static PasswordHasher<Account> CreateHasher()
+    {
+        var options = new PasswordHasherOptions();
+        ConfigureHasher(options);
+        return new(Options.Create(options));
+    }
+
+    // OWASP's figure for PBKDF2 with HMAC-SHA-512 (password storage cheat sheet, from memory).
+    private static void ConfigureHasher(PasswordHasherOptions options) => options.IterationCount = 210_000;
 
     private static void Configure(Npgsql.EntityFrameworkCore.PostgreSQL.Infrastructure.NpgsqlDbContextOptionsBuilder postgres) =>
         postgres.MigrationsAssembly(MigrationsAssembly).MigrationsHistoryTable(MigrationsTable);

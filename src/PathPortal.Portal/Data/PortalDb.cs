@@ -1,3 +1,4 @@
+using System.Data;
 using Microsoft.EntityFrameworkCore;
 using Npgsql;
 using PathPortal.Portal.Domain;
@@ -13,28 +14,17 @@ public sealed class PortalDb(DbContextOptions<PortalDbContext> options, TimeProv
     private const int Tries = 6;
 
     /// <summary>Opens a transaction that the caller commits, or drops by disposing it.</summary>
-    public async Task<PortalSession> OpenAsync(Actor actor, CancellationToken cancellation = default)
-    {
-        var db = new PortalDbContext(options);
-        try
-        {
-            await db.Database.BeginTransactionAsync(cancellation);
-            await db.Database.ExecuteSqlAsync(
-                $"SELECT set_config('pathportal.actor', {actor.AccountId?.ToString() ?? actor.Name ?? ""}, true)", cancellation);
-            return new PortalSession(db, actor, clock);
-        }
-        catch
-        {
-            await db.DisposeAsync();
-            throw;
-        }
-    }
+    public Task<PortalSession> OpenAsync(Actor actor, CancellationToken cancellation = default) =>
+        OpenAsync(actor, IsolationLevel.ReadCommitted, cancellation);
 
-    /// <summary>Reads in a transaction that is never committed.</summary>
+    /// <summary>Opens a transaction that only reads, and sees one moment throughout.</summary>
+    public Task<PortalSession> OpenSnapshotAsync(Actor actor, CancellationToken cancellation = default) =>
+        OpenAsync(actor, IsolationLevel.RepeatableRead, cancellation);
+
+    /// <summary>Reads one moment, in a transaction that is never committed.</summary>
     public async Task<T> ReadAsync<T>(Actor actor, Func<PortalSession, Task<T>> read, CancellationToken cancellation = default)
     {
-        await using var session = await OpenAsync(actor, cancellation);
-        session.Db.ChangeTracker.QueryTrackingBehavior = QueryTrackingBehavior.NoTracking;
+        await using var session = await OpenSnapshotAsync(actor, cancellation);
         return await read(session);
     }
 
@@ -81,6 +71,26 @@ public sealed class PortalDb(DbContextOptions<PortalDbContext> options, TimeProv
                 if (attempt >= Tries)
                     throw;
             }
+        }
+    }
+
+    private async Task<PortalSession> OpenAsync(Actor actor, IsolationLevel isolation, CancellationToken cancellation)
+    {
+        var db = new PortalDbContext(options);
+        try
+        {
+            var reading = isolation == IsolationLevel.RepeatableRead;
+            if (reading)
+                db.ChangeTracker.QueryTrackingBehavior = QueryTrackingBehavior.NoTracking;
+            await db.Database.BeginTransactionAsync(isolation, cancellation);
+            await db.Database.ExecuteSqlAsync(
+                $"SELECT set_config('pathportal.actor', {actor.AccountId?.ToString() ?? actor.Name ?? ""}, true)", cancellation);
+            return new PortalSession(db, actor, clock, reading);
+        }
+        catch
+        {
+            await db.DisposeAsync();
+            throw;
         }
     }
 

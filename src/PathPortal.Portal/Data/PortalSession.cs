@@ -11,11 +11,13 @@ public sealed class PortalSession : IAsyncDisposable
 {
     private readonly List<HistoryDraft> _drafts = [];
     private readonly List<Func<DbTransaction, CancellationToken, Task>> _lastSteps = [];
+    private readonly bool _reading;
     private Access? _access;
     private bool _flushed;
 
-    internal PortalSession(PortalDbContext db, Actor actor, TimeProvider clock)
+    internal PortalSession(PortalDbContext db, Actor actor, TimeProvider clock, bool reading)
     {
+        _reading = reading;
         Db = db;
         Actor = actor;
         Now = Microseconds(clock.GetUtcNow());
@@ -32,17 +34,20 @@ public sealed class PortalSession : IAsyncDisposable
     internal string? TransactionId { get; private set; }
 
     /// <summary>
-    /// What the acting account may do, read and locked in this transaction: a role taken away or an account disabled at the same time waits,
-    /// or is seen. An account that is gone has no rights.
+    /// What the acting account may do, read in this transaction and locked unless it only reads: a role taken away or an account disabled at
+    /// the same time waits, or is seen. An account that is gone has no rights.
     /// </summary>
     public async Task<Access> AccessAsync(CancellationToken cancellation = default)
     {
         if (_access is not null)
             return _access;
         var id = Actor.AccountId ?? throw new InvalidOperationException($"{Actor} is no account and has no rights of its own.");
-        var account = await Db.Users.FromSql($"SELECT * FROM accounts WHERE id = {id} FOR SHARE").AsNoTracking().SingleOrDefaultAsync(cancellation);
-        var roles = await Db.PlantRoles.FromSql($"SELECT * FROM plant_roles WHERE account_id = {id} FOR SHARE").AsNoTracking()
-            .Select(r => new { r.PlantId, r.Role }).ToListAsync(cancellation);
+        var accounts = _reading ? Db.Users.Where(a => a.Id == id) : Db.Users.FromSql($"SELECT * FROM accounts WHERE id = {id} FOR SHARE");
+        var account = await accounts.AsNoTracking().SingleOrDefaultAsync(cancellation);
+        var given = _reading
+            ? Db.PlantRoles.Where(r => r.AccountId == id)
+            : Db.PlantRoles.FromSql($"SELECT * FROM plant_roles WHERE account_id = {id} FOR SHARE");
+        var roles = await given.AsNoTracking().Select(r => new { r.PlantId, r.Role }).ToListAsync(cancellation);
         return _access = account is null
             ? new Access(id, "", false, false, [])
             : new Access(id, account.DisplayName, account.DisabledAt is null, account.AdministersCompany, roles.Select(r => (r.PlantId, r.Role)));
@@ -57,6 +62,8 @@ public sealed class PortalSession : IAsyncDisposable
     /// <summary>Writes everything, history last, and commits.</summary>
     public async Task CommitAsync(CancellationToken cancellation = default)
     {
+        if (_reading)
+            throw new InvalidOperationException("A session that only reads is not committed.");
         await FlushAsync(cancellation);
         await Db.Database.CommitTransactionAsync(cancellation);
     }

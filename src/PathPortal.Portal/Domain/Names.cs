@@ -1,3 +1,5 @@
+using PathPortal.Formats.Problems;
+
 namespace PathPortal.Portal.Domain;
 
 /// <summary>Checks shared by everything that has a name or a note.</summary>
@@ -14,7 +16,7 @@ public static class Names
             return new Refusal(RefusalKind.Invalid, $"The {what} needs a name.");
         if (trimmed.Length > MaxName)
             return new Refusal(RefusalKind.Invalid, $"The name of the {what} has {trimmed.Length} characters; at most {MaxName} fit.");
-        if (trimmed.Any(IsUnseen))
+        if (VisibleText.FirstHidden(trimmed) >= 0)
             return new Refusal(RefusalKind.Invalid, $"The name of the {what} holds a control or direction character.");
         return trimmed;
     }
@@ -22,15 +24,11 @@ public static class Names
     /// <summary>Trimmed note, possibly empty, or why it does not fit.</summary>
     public static Outcome<string> Note(string? text)
     {
-        var trimmed = (text ?? "").Trim();
+        var trimmed = (text ?? "").Trim().ReplaceLineEndings("\n");
         if (trimmed.Length > MaxNote)
             return new Refusal(RefusalKind.Invalid, $"The note has {trimmed.Length} characters; at most {MaxNote} fit.");
-        return trimmed.Any(c => IsUnseen(c) && c is not ('\n' or '\r' or '\t'))
+        return VisibleText.FirstHidden(trimmed, allowLineFeed: true) >= 0
             ? new Refusal(RefusalKind.Invalid, "The note holds a control or direction character.")
             : trimmed;
     }
-
-    // Direction overrides can make a name read as another one.
-    private static bool IsUnseen(char c) =>
-        char.IsControl(c) || c is (>= '\u202A' and <= '\u202E') or (>= '\u2066' and <= '\u2069') or '\u200E' or '\u200F' or '\u2028' or '\u2029';
 }
