@@ -88,5 +88,5 @@ public sealed class RunSamples
     public required double[] PathScale { get; init; }
 
     /// <summary>Use of the limit per sample for every criterion that has one; NaN where it does not apply, +∞ as in <see cref="CriterionOutcome.WorstUse"/>.</summary>
-    public required IReadOnlyDictionary<Criterion, double[]> Use { get; init; }
+    public IReadOnlyDictionary<Criterion, double[]> Use { get; internal set; } = new Dictionary<Criterion, double[]>();
 }
