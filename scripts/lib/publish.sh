@@ -8,7 +8,7 @@ PUBLISH_ROOT=$REPO/artifacts/run
 source_digest() {
     (cd "$REPO" && {
         dotnet --version
-        find src migrations Directory.*.props global.json PathPortal.sln scripts/lib/run.slnf -type f \
+        find src migrations .editorconfig Directory.*.props global.json PathPortal.sln scripts/lib/run.slnf -type f \
             -not -path '*/bin/*' -not -path '*/obj/*' -print0 | sort -z | xargs -0 sha256sum
     } | sha256sum | cut -c1-16)
 }
