@@ -1,3 +1,5 @@
+import "./page-module.js";
+
 // Menus close on Escape and on a click elsewhere; without this script they still open and close.
 document.addEventListener("keydown", event => {
   if (event.key !== "Escape") return;
