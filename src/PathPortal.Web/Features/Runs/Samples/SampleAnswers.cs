@@ -1,3 +1,5 @@
+using PathPortal.Engine.Verdicts;
+
 namespace PathPortal.Web.Features.Runs.Samples;
 
 /// <summary>What the run page's scripts may ask of a run's samples, as bytes.</summary>
@@ -29,6 +31,19 @@ public static class SampleAnswers
         foreach (var column in Columns(run).All)
             packed.AddValues(column, first, end);
         return packed.ToBytes(new { from = first, to = end });
+    }
+
+    /// <summary>The stored bins: worst use and its sample by criterion.</summary>
+    public static byte[] Bins(UseBins bins)
+    {
+        var packed = new PackedSamples();
+        packed.AddSamples("edges", bins.Edges);
+        for (var row = 0; row < bins.Criteria.Length; row++)
+        {
+            packed.AddSamples($"worst.{bins.Criteria[row]}", [.. bins.WorstSample.AsSpan().Slice(row * bins.BinCount, bins.BinCount)]);
+            packed.AddValues(SampleColumns.UseName(bins.Criteria[row]), bins.WorstUse.AsSpan().Slice(row * bins.BinCount, bins.BinCount));
+        }
+        return packed.ToBytes(new { });
     }
 
     private static SampleColumns Columns(RunMaterial run) => SampleColumns.Of(run.Samples, run.Scenario.Arm, run.Scenario.Criteria);

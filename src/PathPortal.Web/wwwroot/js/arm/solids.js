@@ -102,6 +102,8 @@ export function armBodies(drawing, posture, size, marked = -1) {
   const count = drawing.joints.length;
   const radius = j => size * (0.052 - 0.03 * Math.min(j / Math.max(count - 1, 1), 1));
   let pose = drawing.base;
+  const foot = origin(drawing.base);
+  if (foot[2] > size * 0.03) bodies.push(rod([foot[0], foot[1], 0], foot, size * 0.07, size * 0.055, "rail"));
   drawing.joints.forEach((joint, j) => {
     const { fixed, moved } = posture.frames[j];
     link(pose, origin(fixed), radius(j) * 0.82, bodies);

@@ -152,6 +152,12 @@ class RunPage {
     return share < 0 || share > 1 ? null : this.view[0] + share * (this.view[1] - this.view[0]);
   }
 
+  // Passing over a place shows it; leaving goes back to the place the reader chose.
+  #glance(sample) {
+    const k = sample === null ? this.pinned : Math.round(sample);
+    if (k !== this.cursor && !this.player.playing) this.point(k);
+  }
+
   #under(event) {
     const sample = this.#sampleAt(event);
     if (sample === null || !event.target.closest(".run-plot, .run-chart, .run-plot-axis")) return null;
@@ -162,10 +168,9 @@ class RunPage {
   #listen() {
     const on = (target, name, handle) => target.addEventListener(name, handle, { signal: this.listening.signal });
     on(this.lanes, "pointermove", e => {
-      const sample = e.pointerType === "mouse" && !e.buttons ? this.#under(e) : null;
-      if (sample !== null && !this.player.playing) this.point(sample);
+      if (e.pointerType === "mouse" && !e.buttons && !this.player.playing) this.#glance(this.#under(e));
     });
-    on(this.lanes, "pointerleave", () => { if (!this.player.playing) this.point(this.pinned); });
+    on(this.lanes, "pointerleave", () => this.#glance(null));
     on(this.lanes, "click", e => { const sample = this.#under(e); if (sample !== null) this.point(sample, true); });
     on(this.root, "click", e => this.#follow(e));
     on(this.root, "keydown", e => this.#key(e));
