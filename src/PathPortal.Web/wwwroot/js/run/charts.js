@@ -48,6 +48,8 @@ export class Charts {
       this.ready.set(lane.id, plot);
       plot.on("plotly_relayout", change => this.#relaid(change));
       plot.on("plotly_doubleclick", () => this.zoomed(null));
+      // A chart met while it is still being made forgets what it was given; it is given again once it stands.
+      plot.on("plotly_afterplot", () => { if (plot.dataset.points !== undefined && plot.data[0]?.x?.length !== Number(plot.dataset.points)) this.#paint(lane, plot); });
       this.#paint(lane, plot);
     }
     this.root.dataset.charts = `${this.ready.size}`;
@@ -89,10 +91,10 @@ export class Charts {
       mode.push("lines");
     }
     const axis = { gridcolor: grid, linecolor: grid, tickfont: { color: ink, size: 11 } };
+    plot.dataset.points = `${x[0]?.length ?? 0}`;
     window.Plotly.update(plot, { x, y, mode, "line.color": colour, "line.dash": dash, "line.width": width, "marker.size": x.map(() => 3.5), "marker.color": colour }, {
       "xaxis.range": window_, "xaxis.gridcolor": grid, "xaxis.tickfont": axis.tickfont, "yaxis.gridcolor": grid, "yaxis.tickfont": axis.tickfont, "yaxis.zeroline": false,
     });
-    plot.dataset.points = `${y[0]?.length ?? 0}`;
   }
 }
 
