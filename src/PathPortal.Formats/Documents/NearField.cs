@@ -23,12 +23,13 @@ internal sealed class NearField(string name) : Field<CriteriaDocument>(name, req
             return;
         }
 
-        foreach (var (word, value) in part.Properties)
+        foreach (var (word, value, line, column) in part.Properties)
         {
             var known = Criteria.FirstOrDefault(c => c.Word == word);
             if (known.Word is null)
             {
-                problems.Add(value.Line, value.Column, value.Path, word, NearestName.Hint(word, [.. Criteria.Select(c => c.Word)]), "This is not a criterion with a limit.");
+                problems.Add(
+                    line, column, value.Path, word, NearestName.Hint(word, [.. Criteria.Select(c => c.Word)]), "This is not a criterion with a limit.");
             }
             else if (NumberField<CriteriaDocument>.TryNumber(value, Rule, problems, out var number))
             {

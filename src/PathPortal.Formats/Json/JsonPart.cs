@@ -18,7 +18,7 @@ internal sealed class JsonPart
     public string Text { get; init; } = "";
 
     /// <summary>Properties in source order, names unique.</summary>
-    public List<(string Name, JsonPart Value)> Properties { get; } = [];
+    public List<JsonProperty> Properties { get; } = [];
 
     public List<JsonPart> Items { get; } = [];
 

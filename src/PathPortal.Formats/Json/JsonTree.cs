@@ -21,15 +21,16 @@ internal static class JsonTree
             return null;
         }
 
+        if (utf8.Length == 0)
+        {
+            problems.Add(1, 1, "", "", "a JSON object", "The file is empty.");
+            return null;
+        }
+
         var reader = new Utf8JsonReader(utf8, new JsonReaderOptions { MaxDepth = MaxDepth });
         try
         {
-            if (!reader.Read())
-            {
-                problems.Add(1, 1, "", "", "a JSON object", "The file is empty.");
-                return null;
-            }
-
+            reader.Read();
             var places = new LinePlaces(utf8);
             var root = ReadPart(ref reader, "", places, problems);
             reader.Read();
@@ -102,7 +103,7 @@ internal static class JsonTree
             }
 
             reader.Read();
-            part.Properties.Add((name, ReadPart(ref reader, path, places, problems)));
+            part.Properties.Add(new(name, ReadPart(ref reader, path, places, problems), line, column));
         }
     }
 

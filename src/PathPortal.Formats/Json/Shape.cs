@@ -39,7 +39,7 @@ internal sealed class Shape<T>
         foreach (var field in _fields.Where(f => f.Applies(target)))
         {
             var found = part.Properties.Find(p => p.Name == field.Name);
-            if (found.Value is not null)
+            if (found is not null)
             {
                 taken.Add(field.Name);
                 field.Read(found.Value, target, problems);
@@ -51,11 +51,11 @@ internal sealed class Shape<T>
         }
 
         string[] names = [.. _fields.Where(f => f.Applies(target)).Select(f => f.Name)];
-        foreach (var (name, value) in part.Properties.Where(p => !taken.Contains(p.Name)))
+        foreach (var (name, value, line, column) in part.Properties.Where(p => !taken.Contains(p.Name)))
         {
             var elsewhere = _fields.Any(f => f.Name == name);
             problems.Add(
-                value.Line, value.Column, value.Path, name, NearestName.Hint(name, names),
+                line, column, value.Path, name, NearestName.Hint(name, names),
                 elsewhere ? "The property does not belong to an object of this kind." : "The property is not known.");
         }
 

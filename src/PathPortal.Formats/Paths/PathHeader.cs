@@ -12,14 +12,14 @@ internal sealed class PathHeader(CsvRows rows, ProblemList problems)
     /// <summary>The layout, or null with problems added. The rows stand on the header.</summary>
     public PathLayout? Read()
     {
-        if (rows.Fault is { } fault)
+        if (!LooksLikeHeader())
         {
-            problems.Add(fault.Cell.Line, rows.ColumnOf(fault.Cell), "", rows.Shown(fault.Cell), fault.Expected, fault.Message);
             return null;
         }
 
-        if (!LooksLikeHeader())
+        if (rows.Fault is { } fault)
         {
+            problems.Add(fault.Cell.Line, rows.ColumnOf(fault.Cell), "", rows.Shown(fault.Cell), fault.Expected, fault.Message);
             return null;
         }
 

@@ -50,11 +50,8 @@ internal static class PathWriter
             text.Append(',').Append(p.Joints is { } values ? CellNumber.Text(values[j], 0) : "");
         }
 
-        text.Append(',').Append(Quoted(PathLabel.Write(p.Label))).Append("\r\n");
+        text.Append(',').Append(CsvText.Cell(p.Label)).Append("\r\n");
     }
 
     private static string OrBlank(double value, int shift) => value == 0 ? "" : CellNumber.Text(value, shift);
-
-    private static string Quoted(string text) =>
-        text.AsSpan().IndexOfAny(",\"\r\n") >= 0 || text.Trim().Length != text.Length ? "\"" + text.Replace("\"", "\"\"", StringComparison.Ordinal) + "\"" : text;
 }
