@@ -28,7 +28,7 @@ public readonly record struct Angle
             90 or -270 => (1.0, 0.0),
             180 or -180 => (0.0, -1.0),
             270 or -90 => (-1.0, 0.0),
-            var rest => Elementary.SinCos(rest * (Math.PI / 180)),
+            var rest => Deterministic.SinCos(rest * (Math.PI / 180)),
         };
         return new(radians, sin, cos);
     }
@@ -36,7 +36,7 @@ public readonly record struct Angle
     /// <summary>The angle of this many radians; sine and cosine of exactly this number.</summary>
     public static Angle FromRadians(double radians)
     {
-        var (sin, cos) = Elementary.SinCos(radians);
+        var (sin, cos) = Deterministic.SinCos(radians);
         return new(radians, sin, cos);
     }
 }

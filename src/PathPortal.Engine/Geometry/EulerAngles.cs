@@ -47,10 +47,10 @@ public readonly record struct EulerAngles(EulerConvention Convention, double Fir
         var l = 3 - i - j;
         double e = Handedness(i, j);
         var sine = Math.Sqrt(r[i, j] * r[i, j] + r[i, l] * r[i, l]);
-        var b = Elementary.Atan2(sine, r[i, i]);
+        var b = Deterministic.Atan2(sine, r[i, i]);
         return sine > PoleBelow
-            ? (Elementary.Atan2(r[j, i], -e * r[l, i]), b, Elementary.Atan2(r[i, j], e * r[i, l]))
-            : (Elementary.Atan2(e * r[l, j], r[j, j]), b, 0);
+            ? (Deterministic.Atan2(r[j, i], -e * r[l, i]), b, Deterministic.Atan2(r[i, j], e * r[i, l]))
+            : (Deterministic.Atan2(e * r[l, j], r[j, j]), b, 0);
     }
 
     // R = R_i(a) R_j(b) R_k(c).
@@ -58,10 +58,10 @@ public readonly record struct EulerAngles(EulerConvention Convention, double Fir
     {
         double e = Handedness(i, j);
         var cosine = Math.Sqrt(r[i, i] * r[i, i] + r[i, j] * r[i, j]);
-        var b = Elementary.Atan2(e * r[i, k], cosine);
+        var b = Deterministic.Atan2(e * r[i, k], cosine);
         return cosine > PoleBelow
-            ? (Elementary.Atan2(-e * r[j, k], r[k, k]), b, Elementary.Atan2(-e * r[i, j], r[i, i]))
-            : (Elementary.Atan2(e * r[k, j], r[j, j]), b, 0);
+            ? (Deterministic.Atan2(-e * r[j, k], r[k, k]), b, Deterministic.Atan2(-e * r[i, j], r[i, i]))
+            : (Deterministic.Atan2(e * r[k, j], r[j, j]), b, 0);
     }
 
     private static int Handedness(int i, int j) => (i + 1) % 3 == j ? 1 : -1;

@@ -22,7 +22,7 @@ public static class RotationVector
         var sine = Math.Sqrt(x * x + y * y + z * z);
         var scale = sine < SeriesBelow
             ? 2 / w * (1 - sine * sine / (3 * w * w))
-            : 2 * Elementary.Atan2(sine, w) / sine;
+            : 2 * Deterministic.Atan2(sine, w) / sine;
         return new(scale * x, scale * y, scale * z);
     }
 
@@ -30,7 +30,7 @@ public static class RotationVector
     public static UnitQuaternion ToQuaternion(Vector3D r)
     {
         var half = r.Norm / 2;
-        var (sin, cos) = Elementary.SinCos(half);
+        var (sin, cos) = Deterministic.SinCos(half);
         var scale = half < SeriesBelow ? 0.5 * (1 - half * half / 6) : 0.5 * sin / half;
         return UnitQuaternion.FromComponents(cos, scale * r.X, scale * r.Y, scale * r.Z);
     }

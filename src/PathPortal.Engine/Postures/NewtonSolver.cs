@@ -55,7 +55,8 @@ internal sealed class NewtonSolver(ArmModel arm, RigidTransform toolInFlange)
             }
 
             PoseError.WriteJacobian(task, GeometricJacobian.Compute(arm, pose, tool.Translation), tool.Rotation, jacobian);
-            Scale(jacobian[..(m * n)], error[..m], n, L);
+            PoseError.ScaleJacobian(arm, jacobian[..(m * n)]);
+            PoseError.ScaleError(arm, error[..m]);
             var damping = DampingFloor + SquareOf(error[..m]);
             if (!DampedLeastSquares.Solve(jacobian[..(m * n)], m, n, damping, error[..m], step[..n]))
             {
@@ -71,20 +72,6 @@ internal sealed class NewtonSolver(ArmModel arm, RigidTransform toolInFlange)
 
         best[..n].CopyTo(joints);
         return bestSize <= Tolerance;
-    }
-
-    // Ĵ = diag(I/L, I) J diag(ℓ), ê = diag(I/L, I) e.
-    private void Scale(Span<double> jacobian, Span<double> error, int n, double L)
-    {
-        for (var i = 0; i < jacobian.Length; i++)
-        {
-            jacobian[i] *= (i / n < 3 ? 1 / L : 1) * (arm.Joints[i % n].Kind == JointKind.Prismatic ? L : 1);
-        }
-
-        for (var row = 0; row < 3; row++)
-        {
-            error[row] /= L;
-        }
     }
 
     private static double Largest(ReadOnlySpan<double> values)

@@ -56,4 +56,23 @@ internal static class PoseError
             }
         }
     }
+
+    /// <summary>Scales rows of <see cref="WriteJacobian"/> in place: diag(I/L, I) J diag(ℓ), ℓ = L for prismatic joints.</summary>
+    public static void ScaleJacobian(ArmModel arm, Span<double> rows)
+    {
+        var (n, L) = (arm.Joints.Length, arm.CharacteristicLength);
+        for (var i = 0; i < rows.Length; i++)
+        {
+            rows[i] *= (i / n < 3 ? 1 / L : 1) * (arm.Joints[i % n].Kind == JointKind.Prismatic ? L : 1);
+        }
+    }
+
+    /// <summary>Scales a written error in place: linear rows divided by L.</summary>
+    public static void ScaleError(ArmModel arm, Span<double> rows)
+    {
+        for (var row = 0; row < 3; row++)
+        {
+            rows[row] /= arm.CharacteristicLength;
+        }
+    }
 }

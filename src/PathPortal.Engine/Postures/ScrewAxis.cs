@@ -8,7 +8,7 @@ internal readonly record struct ScrewAxis(Vector3D Direction, Vector3D Point)
     /// <summary>A direction turned about this axis by θ.</summary>
     public Vector3D Turn(double angle, Vector3D v)
     {
-        var (sin, cos) = Elementary.SinCos(angle);
+        var (sin, cos) = Deterministic.SinCos(angle);
         var along = Direction.Dot(v) * Direction;
         return along + cos * (v - along) + sin * Direction.Cross(v);
     }
@@ -21,7 +21,7 @@ internal readonly record struct ScrewAxis(Vector3D Direction, Vector3D Point)
     {
         var vAcross = v - Direction.Dot(v) * Direction;
         var wAcross = w - Direction.Dot(w) * Direction;
-        return Elementary.Atan2(Direction.Dot(vAcross.Cross(wAcross)), vAcross.Dot(wAcross));
+        return Deterministic.Atan2(Direction.Dot(vAcross.Cross(wAcross)), vAcross.Dot(wAcross));
     }
 
     /// <summary>The rotation about this axis by θ.</summary>

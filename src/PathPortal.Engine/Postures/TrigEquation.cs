@@ -17,7 +17,7 @@ internal static class TrigEquation
             return 0;
         }
 
-        var middle = Elementary.Atan2(b, a);
+        var middle = Deterministic.Atan2(b, a);
         var square = reach * reach - c * c;
         if (!(square > 0))
         {
@@ -25,7 +25,7 @@ internal static class TrigEquation
             return 1;
         }
 
-        var spread = Elementary.Atan2(Math.Sqrt(square), c);
+        var spread = Deterministic.Atan2(Math.Sqrt(square), c);
         solutions[0] = middle + spread;
         solutions[1] = middle - spread;
         return 2;
