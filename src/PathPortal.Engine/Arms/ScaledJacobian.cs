@@ -2,7 +2,6 @@ using System.Collections.Immutable;
 using MathNet.Numerics.LinearAlgebra;
 using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Paths;
-using PathPortal.Engine.Postures;
 
 namespace PathPortal.Engine.Arms;
 
@@ -45,10 +44,10 @@ public sealed class ScaledJacobian
     {
         var pose = ArmPose.Compute(arm, joints);
         var tool = pose.Tool(toolInFlange);
-        var rows = PoseError.RowCount(task);
+        var rows = TaskRows.RowCount(task);
         var elements = new double[rows * joints.Length];
-        PoseError.WriteJacobian(task, GeometricJacobian.Compute(arm, pose, tool.Translation), tool.Rotation, elements);
-        PoseError.ScaleJacobian(arm, elements);
+        TaskRows.WriteJacobian(task, GeometricJacobian.Compute(arm, pose, tool.Translation), tool.Rotation, elements);
+        TaskRows.ScaleJacobian(arm, elements);
         return new(elements, rows, joints.Length);
     }
 }

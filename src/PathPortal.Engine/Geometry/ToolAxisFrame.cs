@@ -3,8 +3,9 @@ namespace PathPortal.Engine.Geometry;
 /// <summary>Frames made from a tool axis alone, which fixes five of six directions; the turn about the axis is chosen, not given.</summary>
 public static class ToolAxisFrame
 {
-    // Where 1 + cos falls below this the axis of the shortest turn is lost in rounding (cross product below 1.5e-6) and a perpendicular is chosen.
-    private const double OppositeBelow = 1e-12;
+    // Where |from + to| falls below this, rounding leads the axis of the shortest turn and a perpendicular one is chosen; the vector then misses
+    // by as much.
+    private const double OppositeBelow = 1e-7;
 
     /// <summary>
     /// The rotation by the smallest angle that takes unit vector <paramref name="from"/> to unit vector <paramref name="to"/>. For opposite vectors
@@ -12,12 +13,12 @@ public static class ToolAxisFrame
     /// </summary>
     public static UnitQuaternion ShortestTurn(Vector3D from, Vector3D to)
     {
-        var cosine = from.Dot(to);
-        if (1 + cosine > OppositeBelow)
+        // |from + to| is twice the cosine of the half angle; taking it from 1 + cos instead would lose half the digits near 180°.
+        var sum = (from + to).Norm;
+        if (sum > OppositeBelow)
         {
-            // (1 + cos, sin · axis) is the half-angle quaternion times 2 cos of the half angle.
-            var axis = from.Cross(to);
-            return UnitQuaternion.FromComponents(1 + cosine, axis.X, axis.Y, axis.Z);
+            var axis = 1 / sum * from.Cross(to);
+            return UnitQuaternion.FromComponents(sum / 2, axis.X, axis.Y, axis.Z);
         }
 
         var side = Math.Abs(from.X) < 1 - 1e-9 ? Vector3D.UnitX : Vector3D.UnitY;

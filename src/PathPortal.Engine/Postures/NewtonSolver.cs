@@ -22,7 +22,7 @@ internal sealed class NewtonSolver(ArmModel arm, RigidTransform toolInFlange)
     /// <summary>Moves <paramref name="joints"/> to the nearest solution found; false, with the best joints reached, where there is none.</summary>
     public bool Solve(TaskKind task, RigidTransform goal, Span<double> joints)
     {
-        var m = PoseError.RowCount(task);
+        var m = TaskRows.RowCount(task);
         var n = joints.Length;
         var L = arm.CharacteristicLength;
         Span<double> error = stackalloc double[6];
@@ -37,7 +37,7 @@ internal sealed class NewtonSolver(ArmModel arm, RigidTransform toolInFlange)
         {
             var pose = ArmPose.Compute(arm, joints);
             var tool = pose.Tool(toolInFlange);
-            PoseError.Write(task, tool, goal, error);
+            TaskRows.Write(task, tool, goal, error);
             var size = Largest(error[..m]);
             if (size < bestSize)
             {
@@ -54,9 +54,9 @@ internal sealed class NewtonSolver(ArmModel arm, RigidTransform toolInFlange)
                 break;
             }
 
-            PoseError.WriteJacobian(task, GeometricJacobian.Compute(arm, pose, tool.Translation), tool.Rotation, jacobian);
-            PoseError.ScaleJacobian(arm, jacobian[..(m * n)]);
-            PoseError.ScaleError(arm, error[..m]);
+            TaskRows.WriteJacobian(task, GeometricJacobian.Compute(arm, pose, tool.Translation), tool.Rotation, jacobian);
+            TaskRows.ScaleJacobian(arm, jacobian[..(m * n)]);
+            TaskRows.ScaleError(arm, error[..m]);
             var damping = DampingFloor + SquareOf(error[..m]);
             if (!DampedLeastSquares.Solve(jacobian[..(m * n)], m, n, damping, error[..m], step[..n]))
             {

@@ -27,7 +27,7 @@ internal sealed class SearchedBranches(ArmModel arm, RigidTransform toolInFlange
 
     public override List<Posture> Find(TaskKind task, RigidTransform toolInBase, ReadOnlySpan<double> near = default)
     {
-        var spare = arm.Joints.Length > PoseError.RowCount(task);
+        var spare = arm.Joints.Length > TaskRows.RowCount(task);
         var found = new List<double[]>();
         bool Keep(double[] joints)
         {

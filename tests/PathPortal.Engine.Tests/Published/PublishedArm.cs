@@ -59,6 +59,23 @@ public static class PublishedArm
         return ChainLink.ToArm("published", links, rest, characteristicLength);
     }
 
+    /// <summary>An arm of turning joints given by space screws (ω, v) and the flange M at zero; the point on an axis nearest to the origin is ω × v.</summary>
+    public static ArmModel FromScrews(JsonElement screws, JsonElement flangeAtZero)
+    {
+        var links = new List<ChainLink>();
+        var previous = RigidTransform.Identity;
+        foreach (var screw in PublishedCase.Matrix(screws))
+        {
+            Vector3D omega = new(screw[0], screw[1], screw[2]), v = new(screw[3], screw[4], screw[5]);
+            var origin = new RigidTransform(RotationMatrix.Identity, omega.Cross(v));
+            links.Add(ChainLink.AboutAxis(
+                $"j{links.Count + 1}", JointKind.Revolute, previous.Inverse() * origin, omega, 1, 0, new()));
+            previous = origin;
+        }
+
+        return ChainLink.ToArm("screws", links, previous.Inverse() * PublishedCase.Pose(flangeAtZero), 1);
+    }
+
     // A missing axis means x (URDF specification).
     private static Vector3D Axis(JsonElement row) => row.TryGetProperty("axis", out var axis) ? Vector(axis) : Vector3D.UnitX;
 

@@ -1,14 +1,13 @@
-using PathPortal.Engine.Arms;
 using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Paths;
 
-namespace PathPortal.Engine.Postures;
+namespace PathPortal.Engine.Arms;
 
 /// <summary>
 /// The rows of a tool pose that a task constrains: how far a posture is from a goal, and the Jacobian of exactly those rows. Linear rows in base
 /// axes; angular rows in base axes for a pose, x and y of the tool frame for an axis task.
 /// </summary>
-internal static class PoseError
+internal static class TaskRows
 {
     public static int RowCount(TaskKind task) => task switch
     {
