@@ -30,7 +30,7 @@ public sealed class RunReportHost : IAsyncDisposable
 
     public Uri Address => new(new Uri(_app.Urls.First()), View.Href);
 
-    public static async Task<RunReportHost> StartAsync(InventedRun run)
+    public static async Task<RunReportHost> StartAsync(InventedRun run, Action<WebApplication>? first = null)
     {
         var builder = WebApplication.CreateBuilder(new WebApplicationOptions
         {
@@ -49,6 +49,7 @@ public sealed class RunReportHost : IAsyncDisposable
         builder.Services.AddSingleton(view);
 
         var app = builder.Build();
+        first?.Invoke(app);
         app.UseSecurityHeaders();
         app.UseResponseCompression();
         app.UseAntiforgery();

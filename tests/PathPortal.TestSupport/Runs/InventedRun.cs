@@ -14,12 +14,6 @@ namespace PathPortal.TestSupport.Runs;
 /// </summary>
 public sealed class InventedRun
 {
-    private static readonly Criterion[] Criteria =
-    [
-        Criterion.AcrossPath, Criterion.StandOff, Criterion.ToolAxis, Criterion.JointPosition, Criterion.JointSpeed, Criterion.JointAcceleration,
-        Criterion.Singularity, Criterion.ToolSpeed,
-    ];
-
     private readonly double[][] _q, _v, _a;
 
     private InventedRun(int count, double period)
@@ -47,13 +41,14 @@ public sealed class InventedRun
         var motion = new InventedRun(count, period) { Samples = null!, Scenario = null! };
         motion.Move();
         var samples = motion.Measure(spike);
-        var bins = BinsOf(samples);
+        var scenario = ScenarioOf(period);
+        var judgement = Judgement.Of(scenario, samples, new() { Finished = true, Reachable = true, LoopSound = true });
         return new InventedRun(count, period)
         {
             Samples = samples,
-            Scenario = ScenarioOf(),
-            Bins = bins,
-            Summary = SummaryOf(samples, bins),
+            Scenario = scenario,
+            Bins = judgement.Bins()!,
+            Summary = SummaryOf(samples, judgement),
         };
     }
 
@@ -112,32 +107,8 @@ public sealed class InventedRun
             s.SigmaMax[k] = 2.1;
             s.DampingSquared[k] = s.SigmaMin[k] < 0.05 ? 4e-4 * (1 - Math.Pow(s.SigmaMin[k] / 0.05, 2)) : 0;
             s.SpeedScale[k] = s.PathScale[k] = 1;
-            Judge(s, k, process);
         }
         return s;
-    }
-
-    private static void Judge(RunSamples s, int k, bool process)
-    {
-        var arm = InventedArm.Model;
-        double speed = 0, acceleration = 0, position = 0;
-        for (var j = 0; j < 6; j++)
-        {
-            var limits = arm.Joints[j].Limits;
-            speed = Math.Max(speed, Math.Abs(s.JointSpeedDemands[j][k]) / (limits.Speed!.Value.Value * Sheet.SpeedShare));
-            acceleration = Math.Max(acceleration, Math.Abs(s.JointAccelerationDemands[j][k]) / (limits.Acceleration!.Value.Value * Sheet.AccelerationShare));
-            position = Math.Max(position, Sheet.RevoluteClearance / Math.Min(s.Joints[j][k] - limits.Low!.Value.Value, limits.High!.Value.Value - s.Joints[j][k]));
-        }
-        Set(Criterion.AcrossPath, process, s.AcrossPath[k] / Sheet.AcrossTolerance!.Value);
-        Set(Criterion.StandOff, process, s.StandOff[k] / Sheet.StandOffTolerance!.Value);
-        Set(Criterion.ToolAxis, process, s.ToolAxisAngle[k] / Sheet.AxisTolerance!.Value);
-        Set(Criterion.JointPosition, true, position);
-        Set(Criterion.JointSpeed, true, speed);
-        Set(Criterion.JointAcceleration, true, acceleration);
-        Set(Criterion.Singularity, true, Sheet.RequiredSigmaMin / s.SigmaMin[k]);
-        Set(Criterion.ToolSpeed, process, Math.Abs(s.ToolSpeed[k] - s.ReferenceSpeed[k]) / (0.15 * s.ReferenceSpeed[k]));
-
-        void Set(Criterion criterion, bool applies, double use) => s.Use[criterion][k] = applies ? use : double.NaN;
     }
 
     public static CriteriaSheet Sheet { get; } = new()
@@ -153,11 +124,11 @@ public sealed class InventedRun
         ToolSpeedTolerance = 0.15,
     };
 
-    private static Scenario ScenarioOf() => new()
+    private static Scenario ScenarioOf(double period) => new()
     {
         Arm = InventedArm.Model,
         Cell = InventedArm.Cell,
-        Controller = new() { Period = 0.004, PositionGain = 20, OrientationGain = 20, ToolAcceleration = 2, ToolTurnSpeed = 3, ToolTurnAcceleration = 10 },
+        Controller = new() { Period = period, PositionGain = 20, OrientationGain = 20, ToolAcceleration = 2, ToolTurnSpeed = 3, ToolTurnAcceleration = 10 },
         Path = new([.. Enumerable.Range(0, 13).Select(i => new Waypoint
         {
             Label = i switch { 0 => "approach", 1 => "seam start", 6 => "corner", 8 => "lip", 12 => "clear", _ => "" },
@@ -170,101 +141,27 @@ public sealed class InventedRun
         Criteria = Sheet,
     };
 
-    private static UseBins BinsOf(RunSamples s)
+    private static RunSummary SummaryOf(RunSamples s, Judgement judgement) => new()
     {
-        var bins = Math.Min(UseBins.MaxBins, s.Count);
-        var edges = Enumerable.Range(0, bins + 1).Select(b => (int)((long)s.Count * b / bins)).ToImmutableArray();
-        var use = new float[Criteria.Length * bins];
-        var worst = new int[use.Length];
-        for (var row = 0; row < Criteria.Length; row++)
-            for (var bin = 0; bin < bins; bin++)
-            {
-                var (at, value) = (-1, double.NaN);
-                for (var k = edges[bin]; k < edges[bin + 1]; k++)
-                    if (s.Use[Criteria[row]][k] is var candidate && !double.IsNaN(candidate) && !(candidate <= value))
-                        (at, value) = (k, candidate);
-                (worst[row * bins + bin], use[row * bins + bin]) = (at, (float)value);
-            }
-        return new() { Criteria = [.. Criteria], Edges = edges, WorstUse = [.. use], WorstSample = [.. worst] };
-    }
-
-    private static RunSummary SummaryOf(RunSamples s, UseBins bins)
-    {
-        var outcomes = Criteria.Select(c => OutcomeOf(s, c)).ToList();
-        outcomes.Add(new() { Criterion = Criterion.Tracking, Status = CriterionStatus.NotAsked, Binding = true, NearThreshold = 0.8 });
-        foreach (var criterion in new[] { Criterion.Finished, Criterion.Reachable, Criterion.StartInside, Criterion.LoopSound })
-            outcomes.Add(new() { Criterion = criterion, Status = CriterionStatus.Pass, Binding = true, NearThreshold = 0.8 });
-        return new()
-        {
-            NumericsVersion = 1,
-            Verdict = outcomes.Any(o => o is { Binding: true, Status: CriterionStatus.Fail }) ? Verdict.Fail : Verdict.Pass,
-            Outcomes = [.. outcomes.OrderBy(o => o.Criterion)],
-            Findings = [.. Criteria.SelectMany(c => Findings(s, c)).OrderByDescending(f => f.Binding && f.Over).ThenByDescending(f => f.WorstUse)],
-            Postures =
-            [
-                new([.. s.Joints.Select(q => q[0])], "shoulder front, elbow up, wrist not flipped", Verdict.Fail, 1.31, Criterion.JointSpeed, true),
-                new([0.05, 0.72, -0.25, -3.04, 0.95, 3.44], "shoulder front, elbow up, wrist flipped", Verdict.Fail, double.PositiveInfinity, Criterion.JointPosition, false),
-            ],
-            PostureChoice = "Of 2 start postures this one comes least close to a limit.",
-            SampleCount = s.Count,
-            Period = s.Period,
-            CycleTime = (s.Count - 1) * s.Period,
-            PlannedTime = (s.Count - 1) * s.Period - 0.41,
-            PathLength = 7.214,
-            CharacteristicLength = 1,
-            Extremes = new(),
-            Remarks = [],
-        };
-    }
-
-    private static CriterionOutcome OutcomeOf(RunSamples s, Criterion criterion)
-    {
-        var use = s.Use[criterion];
-        var at = Enumerable.Range(0, s.Count).Where(k => !double.IsNaN(use[k])).MaxBy(k => use[k]);
-        var binding = criterion != Criterion.Singularity;
-        var (value, limit, unit, joint) = criterion switch
-        {
-            Criterion.AcrossPath => (s.AcrossPath[at], Sheet.AcrossTolerance!.Value, "m", (int?)null),
-            Criterion.StandOff => (s.StandOff[at], Sheet.StandOffTolerance!.Value, "m", null),
-            Criterion.ToolAxis => (s.ToolAxisAngle[at], Sheet.AxisTolerance!.Value, "rad", null),
-            Criterion.JointSpeed => (Math.Abs(s.JointSpeedDemands[4][at]), InventedArm.Model.Joints[4].Limits.Speed!.Value.Value * 0.9, "rad/s", 4),
-            Criterion.JointAcceleration => (Math.Abs(s.JointAccelerationDemands[4][at]), InventedArm.Model.Joints[4].Limits.Acceleration!.Value.Value * 0.9, "rad/s²", 4),
-            Criterion.Singularity => (s.SigmaMin[at], Sheet.RequiredSigmaMin, "1", null),
-            Criterion.ToolSpeed => (Math.Abs(s.ToolSpeed[at] - s.ReferenceSpeed[at]), 0.15 * s.ReferenceSpeed[at], "m/s", null),
-            _ => (0.4, Sheet.RevoluteClearance, "rad", 4),
-        };
-        return new()
-        {
-            Criterion = criterion,
-            Status = use[at] > 1 ? CriterionStatus.Fail : use[at] >= 0.8 ? CriterionStatus.Near : CriterionStatus.Pass,
-            Binding = binding,
-            WorstUse = use[at],
-            Place = PlaceOf(s, at),
-            Joint = joint,
-            Value = value,
-            LimitValue = limit,
-            Unit = unit,
-            NearThreshold = 0.8,
-        };
-    }
-
-    private static IEnumerable<Finding> Findings(RunSamples s, Criterion criterion)
-    {
-        var use = s.Use[criterion];
-        for (var k = 0; k < s.Count; k++)
-        {
-            if (!(use[k] >= 0.8))
-                continue;
-            var from = k;
-            while (k + 1 < s.Count && use[k + 1] >= 0.8)
-                k++;
-            var worst = Enumerable.Range(from, k - from + 1).MaxBy(i => use[i]);
-            yield return new(criterion, use[worst] > 1, criterion != Criterion.Singularity, PlaceOf(s, from), PlaceOf(s, k), PlaceOf(s, worst), use[worst],
-                criterion is Criterion.JointSpeed or Criterion.JointAcceleration ? 4 : null);
-        }
-    }
-
-    private static Place PlaceOf(RunSamples s, int k) => new(k, k * s.Period, s.PathFraction[k], s.Waypoint[k]);
+        NumericsVersion = 1,
+        Verdict = judgement.Verdict,
+        Outcomes = judgement.Outcomes,
+        Findings = judgement.Findings().Kept,
+        Postures =
+        [
+            new([.. s.Joints.Select(q => q[0])], "shoulder front, elbow up, wrist not flipped", judgement.Verdict, judgement.WorstUse, judgement.WorstCriterion, true),
+            new([0.05, 0.72, -0.25, -3.04, 0.95, 3.44], "shoulder front, elbow up, wrist flipped", Verdict.Fail, double.PositiveInfinity, Criterion.JointPosition, false),
+        ],
+        PostureChoice = "Of 2 start postures this one comes least close to a limit.",
+        SampleCount = s.Count,
+        Period = s.Period,
+        CycleTime = (s.Count - 1) * s.Period,
+        PlannedTime = (s.Count - 1) * s.Period - 0.41,
+        PathLength = 7.214,
+        CharacteristicLength = 1,
+        Extremes = judgement.Extremes(),
+        Remarks = [],
+    };
 
     private RunSamples NewSamples() => new()
     {
@@ -295,7 +192,6 @@ public sealed class InventedRun
         DampingSquared = new double[Count],
         SpeedScale = new double[Count],
         PathScale = new double[Count],
-        Use = Criteria.ToDictionary(c => c, _ => new double[Count]),
     };
 
     private double[][] Columns(int columns) => [.. Enumerable.Range(0, columns).Select(_ => new double[Count])];

@@ -11,6 +11,7 @@ export class Charts {
     this.period = period;
     this.zoomed = zoomed;
     this.ready = new Map();
+    this.painted = 0;
     this.#colour();
     this.forget = onThemeChange(() => { this.#colour(); this.#paintAll(); });
     this.watch = new MutationObserver(() => this.#adopt());
@@ -41,18 +42,19 @@ export class Charts {
     window.Plotly.relayout(plot, { "xaxis.range": range });
   }
 
+  // A chart may be met while it is still being made; what it is given then is lost. Its ticks are the last thing drawn.
   #adopt() {
     for (const lane of this.lanes) {
       const plot = this.root.querySelector(`[data-chart="${lane.id}"] .js-plotly-plot`);
-      if (!plot?.on || !plot.layout || this.ready.get(lane.id) === plot) continue;
+      if (!plot?.on || !plot.querySelector(".xtick") || this.ready.get(lane.id) === plot) continue;
       this.ready.set(lane.id, plot);
-      plot.on("plotly_relayout", change => this.#relaid(change));
-      plot.on("plotly_doubleclick", () => this.zoomed(null));
-      // A chart met while it is still being made forgets what it was given; it is given again once it stands.
-      plot.on("plotly_afterplot", () => { if (plot.dataset.points !== undefined && plot.data[0]?.x?.length !== Number(plot.dataset.points)) this.#paint(lane, plot); });
-      this.#paint(lane, plot);
+      setTimeout(() => {
+        plot.on("plotly_relayout", change => this.#relaid(change));
+        plot.on("plotly_doubleclick", () => this.zoomed(null));
+        this.#paint(lane, plot);
+        this.root.dataset.charts = `${++this.painted}`;
+      });
     }
-    this.root.dataset.charts = `${this.ready.size}`;
   }
 
   #relaid(change) {
