@@ -31,16 +31,11 @@ public sealed class ReadResult<T>
         ? ""
         : string.Create(CultureInfo.InvariantCulture, $"and {(Stopped ? "at least " : "")}{ProblemsNotListed} more");
 
-    /// <summary>A refusal for one reason that lies outside the file's text, such as its size.</summary>
-    public static ReadResult<T> Refused(FormatProblem problem) => new() { Problems = [problem] };
+    /// <summary>These problems as the result of a step that follows.</summary>
+    public ReadResult<TOther> Refused<TOther>()
+        where TOther : class => new() { Problems = Problems, ProblemsNotListed = ProblemsNotListed, Stopped = Stopped };
 
-    /// <summary>The problems of a step before this one.</summary>
-    public static ReadResult<T> Refused<TOther>(ReadResult<TOther> earlier)
-        where TOther : class
-    {
-        ArgumentNullException.ThrowIfNull(earlier);
-        return new() { Problems = earlier.Problems, ProblemsNotListed = earlier.ProblemsNotListed, Stopped = earlier.Stopped };
-    }
+    internal static ReadResult<T> Of(FormatProblem problem) => new() { Problems = [problem] };
 
     internal static ReadResult<T> Of(T value, ProblemList list) => list.Any
         ? Refused(list)

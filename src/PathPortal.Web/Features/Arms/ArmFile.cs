@@ -24,7 +24,7 @@ internal static class ArmFile
     private static ReadResult<ArmDocument> ReadUrdf(byte[] bytes, ArmUpload upload)
     {
         var model = UrdfModel.Read(bytes);
-        return model.Ok ? model.Value.ToArm(Given(upload.BaseLink), Given(upload.TipLink)) : ReadResult<ArmDocument>.Refused(model);
+        return model.Ok ? model.Value.ToArm(Given(upload.BaseLink), Given(upload.TipLink)) : model.Refused<ArmDocument>();
     }
 
     private static string? Given(string? text) => string.IsNullOrWhiteSpace(text) ? null : text.Trim();
@@ -43,5 +43,5 @@ internal static class ArmFile
     }
 
     private static ReadResult<ArmDocument> Refused(string found, string expected, string message) =>
-        ReadResult<ArmDocument>.Refused(new FormatProblem(0, 0, "", found, expected, message));
+        PathPortal.Formats.Problems.Refused.For<ArmDocument>(new FormatProblem(0, 0, "", found, expected, message));
 }
