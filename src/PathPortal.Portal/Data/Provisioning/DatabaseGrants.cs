@@ -22,17 +22,14 @@ internal sealed class DatabaseGrants(NpgsqlConnection connection)
             sql.Add($"GRANT USAGE ON SCHEMA public TO {name};");
             sql.Add($"REVOKE ALL ON ALL TABLES IN SCHEMA public FROM {name};");
             sql.Add($"REVOKE ALL ON ALL SEQUENCES IN SCHEMA public FROM {name};");
+            sql.Add($"REVOKE ALL ON ALL TABLES IN SCHEMA {JobTables.Schema} FROM {name};");
         }
         foreach (var table in TableRights.All)
         {
             Grant(sql, quote, table.Table, table.Web, web);
             Grant(sql, quote, table.Table, table.Worker, worker);
         }
-        foreach (var table in await JobTableNamesAsync(cancellation))
-        {
-            Grant(sql, quote, table, "SELECT, INSERT, UPDATE, DELETE", web);
-            Grant(sql, quote, table, "SELECT, INSERT, UPDATE, DELETE", worker);
-        }
+        sql.AddRange(JobTables.Grants(Quoted(quote, web), Quoted(quote, worker)));
         await using var command = new NpgsqlCommand(string.Join('\n', sql), connection);
         await command.ExecuteNonQueryAsync(cancellation);
     }
@@ -43,15 +40,5 @@ internal sealed class DatabaseGrants(NpgsqlConnection connection)
             sql.Add($"GRANT {rights} ON {quote.QuoteIdentifier(table)} TO {quote.QuoteIdentifier(role)};");
     }
 
-    private async Task<List<string>> JobTableNamesAsync(CancellationToken cancellation)
-    {
-        List<string> names = [];
-        await using var command = new NpgsqlCommand(
-            "SELECT tablename FROM pg_tables WHERE schemaname = 'public' AND starts_with(tablename, $1) ORDER BY tablename", connection);
-        command.Parameters.Add(new() { Value = JobTables.Prefix });
-        await using var reader = await command.ExecuteReaderAsync(cancellation);
-        while (await reader.ReadAsync(cancellation))
-            names.Add(reader.GetString(0));
-        return names;
-    }
+    private static string? Quoted(NpgsqlCommandBuilder quote, string? role) => role is null ? null : quote.QuoteIdentifier(role);
 }

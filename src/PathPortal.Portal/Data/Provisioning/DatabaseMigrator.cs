@@ -25,7 +25,7 @@ public sealed class DatabaseMigrator(MigrationTarget target)
 
         await using var source = PortalData.OpenDataSource(target.Owner);
         var applied = await MigrateAsync(source, cancellation);
-        await JobTables.ProvisionAsync(target.Owner, cancellation);
+        await JobTables.ProvisionAsync(source, cancellation);
 
         await using var connection = await source.OpenConnectionAsync(cancellation);
         await using var transaction = await connection.BeginTransactionAsync(cancellation);
