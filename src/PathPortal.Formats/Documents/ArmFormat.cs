@@ -15,5 +15,13 @@ internal static class ArmFormat
         .With(new ChoiceField<ArmDocument, ArmKinematics>("kinematics", Words.All<ArmKinematics>(), a => a.Kinematics, (a, v) => a.Kinematics = v))
         .With(new ListField<ArmDocument, JointDocument>(
             "joints", 1, ArmModel.MaxJoints, "joints", a => JointShapes.For(a.Kinematics), a => a.Joints, j => j.Name))
-        .With(new ObjectField<ArmDocument, PoseDocument>("flange_in_last_frame", true, _ => PoseShapes.Pose, a => a.Flange, (a, v) => a.Flange = v)));
+        .With(new ObjectField<ArmDocument, PoseDocument>("flange_in_last_frame", true, _ => PoseShapes.Pose, a => a.Flange, (a, v) => a.Flange = v))
+        .Rule((a, path, problems) =>
+        {
+            // What the engine cannot run on must not be saved either.
+            foreach (var problem in ArmCheck.Find(ArmConversion.ToArmModel(a)))
+            {
+                problems.Add(0, 0, "joints", "", problem.Expected, $"No simulation can run on this arm: {problem.Place}, {problem.Quantity}.");
+            }
+        }));
 }
