@@ -8,6 +8,8 @@ namespace PathPortal.Engine;
 /// </summary>
 public sealed class RunSamples
 {
+    private IReadOnlyDictionary<Criterion, double[]> use = new Dictionary<Criterion, double[]>();
+
     public required int Count { get; init; }
 
     public required int JointCount { get; init; }
@@ -88,5 +90,8 @@ public sealed class RunSamples
     public required double[] PathScale { get; init; }
 
     /// <summary>Use of the limit per sample for every criterion that has one; NaN where it does not apply, +∞ as in <see cref="CriterionOutcome.WorstUse"/>.</summary>
-    public IReadOnlyDictionary<Criterion, double[]> Use { get; internal set; } = new Dictionary<Criterion, double[]>();
+    public IReadOnlyDictionary<Criterion, double[]> Use { get => use; init => use = value; }
+
+    /// <summary>Fills <see cref="Use"/>, once, when the run is judged.</summary>
+    internal void Measured(IReadOnlyDictionary<Criterion, double[]> measured) => use = measured;
 }

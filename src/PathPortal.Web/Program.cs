@@ -2,6 +2,8 @@ using Microsoft.AspNetCore.ResponseCompression;
 using MudBlazor.Services;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Data.Queries;
+using PathPortal.Web.Features.Arms;
+using PathPortal.Web.Features.Cells;
 using PathPortal.Web.Features.Programs;
 using PathPortal.Web.Features.SignIn;
 using PathPortal.Web.Hosting;
@@ -33,6 +35,7 @@ services.AddScoped<SignInHandler>();
 services.AddSingleton<FleetQuery>();
 services.AddSingleton<WaitingQuery>();
 services.AddSingleton<ProgramQuery>();
+services.AddFleetDefinitions();
 
 var app = builder.Build();
 
@@ -50,6 +53,8 @@ app.MapHealth();
 app.MapPreferences();
 app.MapSignOut();
 app.MapRevisionCells();
+app.MapArmFiles();
+app.MapCellFiles();
 app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
 
 await app.RunAsync();

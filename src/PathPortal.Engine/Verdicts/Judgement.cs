@@ -50,7 +50,7 @@ public sealed class Judgement
         ArgumentNullException.ThrowIfNull(facts);
         ImmutableArray<(LimitMeasure Measure, double[] Use)> columns =
             [.. LimitMeasures.For(scenario, samples).Select(m => (m, m.Column(samples.Count)))];
-        samples.Use = columns.ToDictionary(c => c.Measure.Criterion, c => c.Use);
+        samples.Measured(columns.ToDictionary(c => c.Measure.Criterion, c => c.Use));
 
         var start = samples.Count == 0 ? null : samples.Joints.Select(j => j[0]).ToArray();
         var outcomes = Enum.GetValues<Criterion>().Order().Select(criterion =>

@@ -31,6 +31,12 @@ public sealed class ReadResult<T>
         ? ""
         : string.Create(CultureInfo.InvariantCulture, $"and {(Stopped ? "at least " : "")}{ProblemsNotListed} more");
 
+    /// <summary>These problems as the result of a step that follows.</summary>
+    public ReadResult<TOther> Refused<TOther>()
+        where TOther : class => new() { Problems = Problems, ProblemsNotListed = ProblemsNotListed, Stopped = Stopped };
+
+    internal static ReadResult<T> Of(FormatProblem problem) => new() { Problems = [problem] };
+
     internal static ReadResult<T> Of(T value, ProblemList list) => list.Any
         ? Refused(list)
         : new() { Value = value, Remarks = list.Remarks };
