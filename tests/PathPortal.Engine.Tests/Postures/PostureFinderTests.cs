@@ -2,6 +2,7 @@ using PathPortal.Engine.Arms;
 using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Paths;
 using PathPortal.Engine.Postures;
+using PathPortal.Engine.Tests.Published;
 
 namespace PathPortal.Engine.Tests.Postures;
 
@@ -77,22 +78,31 @@ public sealed class PostureFinderTests
     });
 
     [Fact]
-    public void All_RandomSixJointArms_ReachThePose()
+    public void All_RandomSixJointArms_ReachThePoseAndContainTheOriginal() => Seeded.Cases(60, random =>
     {
-        var contained = 0;
-        Seeded.Cases(60, random =>
-        {
-            var arm = TestArms.Random(random, 6);
-            var joints = TestArms.RandomJoints(random, arm);
-            var goal = ArmPose.Compute(arm, joints).Tool(BentTool);
-            var found = new PostureFinder(arm, BentTool).All(goal);
+        var arm = TestArms.Random(random, 6);
+        var joints = TestArms.RandomJoints(random, arm);
+        var goal = ArmPose.Compute(arm, joints).Tool(BentTool);
+        var found = new PostureFinder(arm, BentTool).All(goal);
 
-            Assert.All(found.Inside, p => AssertPose(arm, BentTool, p.Joints.AsSpan(), goal));
-            contained += found.Inside.Any(p => IsNear(arm, p.Joints.AsSpan(), joints, 1e-5)) ? 1 : 0;
-        });
+        Assert.All(found.Inside, p => AssertPose(arm, BentTool, p.Joints.AsSpan(), goal));
 
-        // The search may miss a branch; measured 60 of 60 when written, singular originals apart.
-        Assert.InRange(contained, 55, 60);
+        // A search may miss a branch in principle; over 600 such arms it missed none. Arms with four sliding joints are singular everywhere.
+        var sigma = ScaledJacobian.Compute(arm, joints, BentTool).SingularValues[^1];
+        Assert.True(sigma < 1e-6 || found.Inside.Any(p => IsNear(arm, p.Joints.AsSpan(), joints, 1e-5)), $"original lost, σ_min {sigma}");
+    });
+
+    [Fact]
+    public void Continue_PublishedNewtonExample_ReachesTheTarget()
+    {
+        // Lynch and Park 2017, Example 6.1: planar arm of unit links from (0°, 30°) to the pose of (30°, 90°).
+        var published = PublishedCase.Get("JAC-14");
+        var arm = TestArms.Planar(published.Input("links"));
+        double[] start = [.. published.Input("start_deg").Select(d => d * Math.PI / 180)];
+        double[] target = [.. published.Input("target_deg").Select(d => d * Math.PI / 180)];
+        var reached = new PostureFinder(arm, RigidTransform.Identity).Continue(ArmPose.Compute(arm, target).Flange, start);
+
+        Approximately.Equal(target, reached!.Value, published.Tolerance, published.Source);
     }
 
     [Fact]
