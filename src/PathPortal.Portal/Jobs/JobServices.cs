@@ -1,4 +1,5 @@
 using Microsoft.Extensions.DependencyInjection;
+using PathPortal.Portal.Simulation;
 using Quartz;
 
 namespace PathPortal.Portal.Jobs;
@@ -12,6 +13,10 @@ public static class JobServices
         services.AddQuartz(JobScheduler.ConfigureSender);
         return services.AddSingleton<RunQueue>();
     }
+
+    /// <summary>For a process that shows runs or decides on them. Needs AddPortalData.</summary>
+    public static IServiceCollection AddRunSamples(this IServiceCollection services, RunSampleCacheOptions? options = null) =>
+        services.AddSingleton(options ?? new()).AddSingleton<RunSampleCache>().AddSingleton<DecisionSamples>();
 
     /// <summary>For a worker process. Needs AddPortalData.</summary>
     public static IServiceCollection AddRunWorker(this IServiceCollection services, JobWorkerOptions options)

@@ -43,7 +43,7 @@ internal sealed class JobScene : IAsyncDisposable
         ArmModelRecord arm = new("Invented arm", at);
         _arm = arm.AddVersion(StoredDocument.Of(ArmJson()), "", _author.Id, at);
         CriteriaSheetRecord sheet = new("Invented sheet", at);
-        _criteria = sheet.AddVersion(StoredDocument.Of(new CriteriaDocument { AcrossToleranceMm = 1 }.ToJson()), "", _author.Id, at);
+        _criteria = sheet.AddVersion(StoredDocument.Of(CriteriaJson()), "", _author.Id, at);
         Cell[] cells = [new(_plant.Id, "Cell A", at), new(_plant.Id, "Cell B", at)];
         _setups = [.. cells.Select((c, i) => c.AddSetup(_arm.Id, StoredDocument.Of(SetupJson(i)), "", _author.Id, at))];
         PathProgram program = new(_plant.Id, part.Id, "Invented bead", "sealing", sheet.Id, _author.Id, at);
@@ -67,6 +67,13 @@ internal sealed class JobScene : IAsyncDisposable
     {
         var database = await TestDatabase.CreateAsync();
         return await CreateAsync(database, database.Web);
+    }
+
+    /// <summary>What one cell's scenario is built from, apart from the path.</summary>
+    public static ScenarioInputs Inputs(Func<StartTerms, StartTerms>? terms = null)
+    {
+        StartTerms usual = new("nozzle", "fixture", [0, -1, 1, 0, 1, 0], null);
+        return new(ArmJson(), SetupJson(0), CriteriaJson(), terms is null ? usual : terms(usual));
     }
 
     /// <summary>In a migrated database that somebody else disposes.</summary>
@@ -185,6 +192,8 @@ internal sealed class JobScene : IAsyncDisposable
             })],
         }.ToJson();
     }
+
+    private static string CriteriaJson() => new CriteriaDocument { AcrossToleranceMm = 1 }.ToJson();
 
     private static string SetupJson(int cell) => new CellSetupDocument
     {
