@@ -13,6 +13,7 @@ internal sealed class ProgrammedTrack(ImmutableArray<Segment?> segments)
 {
     private int at;
     private double distance;
+    private double turnShare;
     private Vector3D lastPoint;
     private bool started;
 
@@ -26,11 +27,8 @@ internal sealed class ProgrammedTrack(ImmutableArray<Segment?> segments)
     /// <param name="waypoint">Index of the waypoint the segment ends at.</param>
     public void Begin(int waypoint)
     {
-        (at, distance, started) = (waypoint, 0, false);
-        turnShare = 0;
+        (at, distance, turnShare, started) = (waypoint, 0, 0, false);
     }
-
-    private double turnShare;
 
     /// <summary>Moves on to a sample.</summary>
     /// <param name="point">True tool centre point (m, W).</param>
@@ -40,7 +38,7 @@ internal sealed class ProgrammedTrack(ImmutableArray<Segment?> segments)
     /// <param name="isLast">The run over these segments ends here: what is left up to the furthest place is missed.</param>
     public PathDeviation MoveTo(Vector3D point, Vector3D axis, int lastWaypoint, double furthest, bool isLast)
     {
-        var (from, fromDistance) = (at, distance);
+        var from = at;
         Project(point, lastWaypoint, furthest);
         var here = At(axis);
         var deviation = PathDeviation.Between(point, axis, here.Position, here.Axis);
@@ -52,7 +50,6 @@ internal sealed class ProgrammedTrack(ImmutableArray<Segment?> segments)
         }
 
         (lastPoint, started) = (point, true);
-        _ = fromDistance;
         return deviation;
     }
 
