@@ -25,6 +25,7 @@ public sealed class PortalSite : WebApplicationFactory<Program>
     protected override void ConfigureWebHost(IWebHostBuilder builder)
     {
         builder.UseEnvironment("Production");
+        builder.UseStaticWebAssets();
         builder.UseSetting("ConnectionStrings:Portal", Database.Web);
         // Tests sign in more often within a minute than a person; the tests of the limit set their own.
         builder.UseSetting("SignIn:PostsPerMinute", "10000");
