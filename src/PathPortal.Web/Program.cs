@@ -2,6 +2,8 @@ using Microsoft.AspNetCore.ResponseCompression;
 using MudBlazor.Services;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Data.Queries;
+using PathPortal.Portal.Handling;
+using PathPortal.Portal.Jobs;
 using PathPortal.Web.Features.Arms;
 using PathPortal.Web.Features.Cells;
 using PathPortal.Web.Features.Programs;
@@ -32,10 +34,9 @@ services.AddPortalData(builder.Configuration.GetConnectionString("Portal")
 services.AddPortalSignIn();
 services.AddScoped<CurrentActor>();
 services.AddScoped<SignInHandler>();
-services.AddSingleton<FleetQuery>();
-services.AddSingleton<WaitingQuery>();
-services.AddSingleton<ProgramQuery>();
-services.AddFleetDefinitions();
+services.AddRunQueue();
+services.AddPortalHandlers();
+services.AddPortalQueries();
 
 var app = builder.Build();
 
@@ -55,6 +56,8 @@ app.MapSignOut();
 app.MapRevisionCells();
 app.MapArmFiles();
 app.MapCellFiles();
+app.MapUpload();
+app.MapFiles();
 app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
 
 await app.RunAsync();

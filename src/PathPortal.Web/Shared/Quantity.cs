@@ -1,6 +1,4 @@
-using PathPortal.Web.Shared;
-
-namespace PathPortal.Web.Features.Runs;
+namespace PathPortal.Web.Shared;
 
 /// <summary>An SI value as people at the cell read it: millimetres and degrees, never without unit.</summary>
 public static class Quantity
