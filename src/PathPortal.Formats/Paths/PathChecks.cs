@@ -12,6 +12,9 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
     private const double SamePlaceM = 1e-9;
     private const double SameTurnRad = 4e-9;
 
+    // A parabola through a sharper corner folds up.
+    private const double SharpestTurnRad = 170 * Math.PI / 180;
+
     private readonly int _cornerAt = layout.IndexOf(PathQuantity.Corner);
     private readonly int _leadInAt = layout.IndexOf(PathQuantity.LeadIn);
     private readonly int _processAt = layout.IndexOf(PathQuantity.Process);
@@ -93,6 +96,7 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
         }
         else
         {
+            CheckSharpness(i);
             CheckReach(i, i - 1, rows.Waypoints[i - 1].CornerReach);
             if (i + 1 == Count - 1 || rows.Waypoints[i + 1].CornerReach == 0)
             {
@@ -101,12 +105,25 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
         }
     }
 
+    private void CheckSharpness(int i)
+    {
+        var before = rows.Waypoints[i].Position - rows.Waypoints[i - 1].Position;
+        var after = rows.Waypoints[i + 1].Position - rows.Waypoints[i].Position;
+        var turn = Math.Atan2(before.Cross(after).Norm, before.Dot(after));
+        if (turn > SharpestTurnRad)
+        {
+            Wrong(
+                i, _cornerAt, "0 or blank: the tool stops where the path turns back on itself",
+                string.Create(CultureInfo.InvariantCulture, $"The path turns by {turn * 180 / Math.PI:F1} degrees here, too sharp to round (at most 170)."));
+        }
+    }
+
     // The roundings at both ends of a straight must leave it some length.
     private void CheckReach(int i, int neighbour, double otherReach)
     {
         var (point, other) = (rows.Waypoints[i], rows.Waypoints[neighbour]);
         var length = (point.Position - other.Position).Norm;
-        if (!(point.CornerReach + otherReach <= length * (1 + 1e-9)))
+        if (!(point.CornerReach + otherReach <= length + SamePlaceM))
         {
             Wrong(
                 i, _cornerAt,

@@ -39,8 +39,8 @@ public static class PathCsv
     }
 
     /// <summary>
-    /// The path as a file that reads back as the same path. Postures are written in radians and metres by the kinds of the arm's joints, all
-    /// revolute when none are given; labels that a spreadsheet would take for formulas get an apostrophe, which reading takes away again.
+    /// The path as a file that reads back as the same path. Postures are written in radians and metres by the kinds given, else those the path carries, else all
+    /// revolute; labels that a spreadsheet would take for formulas get an apostrophe, which reading takes away again.
     /// </summary>
     public static string Write(ToolPath path, IReadOnlyList<JointKind>? jointKinds = null) => PathWriter.Write(path, jointKinds);
 }

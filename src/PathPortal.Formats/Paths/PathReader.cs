@@ -36,7 +36,7 @@ internal static class PathReader
         }
 
         PathPlausibility.Remark(points, layout, problems);
-        var path = new ToolPath(points.Waypoints.ToImmutable());
+        var path = new ToolPath(points.Waypoints.ToImmutable()) { PostureKinds = layout.PostureKinds };
         return ReadResult<PathFile>.Of(new(path, PathFigures.Of(path, layout.PostureKinds)), problems);
     }
 }

@@ -14,6 +14,7 @@ internal static class PathWriter
 
     public static string Write(ToolPath path, IReadOnlyList<JointKind>? jointKinds)
     {
+        jointKinds ??= path.PostureKinds.IsEmpty ? null : path.PostureKinds;
         var joints = path.Waypoints.Max(p => p.Joints?.Length ?? 0);
         var text = new StringBuilder("x_mm,y_mm,z_mm,qw,qx,qy,qz,motion,task,process,speed_mm_s,joint_speed_percent,corner_mm,lead_in_mm,dwell_s");
         for (var j = 0; j < joints; j++)

@@ -128,6 +128,17 @@ public static class ScenarioBuilder
                 yield break;
             }
         }
+
+        for (var i = 0; i < Math.Min(path.PostureKinds.Length, arm.Joints.Length); i++)
+        {
+            if (path.PostureKinds[i] != arm.Joints[i].Kind)
+            {
+                var (given, does) = arm.Joints[i].Kind == JointKind.Prismatic ? ("an angle", "slides") : ("a length", "turns");
+                yield return new(
+                    ScenarioPart.Path,
+                    string.Create(CultureInfo.InvariantCulture, $"The path gives {given} for joint {i + 1}, but joint “{arm.Joints[i].Name}” of the arm “{arm.Name}” {does}."));
+            }
+        }
     }
 
     private static ImmutableArray<ScenarioProblem> Problems<T>(ScenarioPart part, string what, ReadResult<T> read)

@@ -126,6 +126,15 @@ public sealed class PathCsvRefusalTests
         Assert.Equal((4, 13, "at most 4 mm"), (problem.Line, problem.Column, problem.Expected));
     }
 
+    [Fact]
+    public void Read_OfACornerThatTurnsBack_IsRefused()
+    {
+        var problem = Assert.Single(PathCsv.Read($"{Q},corner_mm\n0,0,0,1,0,0,0,10,\n50,0,0,,,,,,6\n0,1,0,,,,,,\n").Problems);
+
+        // By hand: 180° less the arc tangent of 1/50.
+        Assert.Equal((3, 13, "The path turns by 178.9 degrees here, too sharp to round (at most 170)."), (problem.Line, problem.Column, problem.Message));
+    }
+
     [Theory]
     [InlineData("fixed_xyz_1_rad,fixed_xyz_2_rad,fixed_xyz_3_rad", "90,0,0", 8, "90")]
     [InlineData("fixed_xyz_1_deg,fixed_xyz_2_deg,fixed_xyz_3_deg", "0,721,0", 10, "721")]
