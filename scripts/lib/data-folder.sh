@@ -9,14 +9,14 @@ default_data_folder() {
 # open_data_folder FOLDER  Makes the folder where it is missing, sees that it will do, and holds it (descriptor 9).
 open_data_folder() {
     local folder=$1
-    if ! mkdir -p -- "$folder" "$folder/log" "$folder/secrets" 2>/dev/null || ! : 2>/dev/null >"$folder/lock"; then
+    if ! mkdir -p -- "$folder" "$folder/log" "$folder/secrets" "$folder/keys" 2>/dev/null || ! : 2>/dev/null >"$folder/lock"; then
         if [[ -d $folder ]]; then require_space "$folder" 1; fi
         die "$(id -un) can't write to the data folder $folder; set PATHPORTAL_DATA to a folder where this is possible"
     fi
     exec 9>"$folder/lock"
     # A start right after a kill meets the last steps of the old one.
     flock -w 10 9 || die "another scripts/run is using the data folder $folder"
-    chmod 700 "$folder/log" "$folder/secrets"
+    chmod 700 "$folder/log" "$folder/secrets" "$folder/keys"
     require_space "$folder" 300
     if is_root; then
         chmod 755 "$folder"

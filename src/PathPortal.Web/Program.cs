@@ -20,6 +20,7 @@ services.AddRazorComponents().AddInteractiveServerComponents();
 services.AddCascadingAuthenticationState();
 services.AddMudServices();
 services.AddAntiforgery(options => options.Cookie.SecurePolicy = CookieSecurePolicy.SameAsRequest);
+services.AddPortalKeys(builder.Configuration);
 services.AddPortalRateLimits(builder.Configuration);
 services.AddResponseCompression(options =>
 {
