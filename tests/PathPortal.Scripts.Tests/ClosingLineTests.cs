@@ -1,5 +1,3 @@
-using PathPortal.TestSupport;
-
 namespace PathPortal.Scripts.Tests;
 
 /// <summary>How <c>scripts/test</c> counts: a project that crashes or runs nothing must not look like a success.</summary>
@@ -32,7 +30,7 @@ public sealed class ClosingLineTests : IDisposable
     [Fact]
     public async Task Test_UnknownProject_IsRefused()
     {
-        var result = await Command.RunAsync(Path.Combine(TestPaths.RepositoryRoot, "scripts", "test"), ["NoSuchProject"]);
+        var result = await Command.RunAsync("scripts/test", ["NoSuchProject"]);
 
         Assert.Equal((1, "test: there is no test project tests/PathPortal.NoSuchProject.Tests"), (result.ExitCode, result.Error.Trim()));
     }

@@ -3,12 +3,12 @@ using PathPortal.TestSupport;
 
 namespace PathPortal.Scripts.Tests;
 
-/// <summary>One finite command, run in the repository's root.</summary>
+/// <summary>One finite command, run in the repository's root; a name with a folder is relative to it.</summary>
 internal sealed record Command(int ExitCode, string Output, string Error)
 {
     public static async Task<Command> RunAsync(string file, string[] arguments, Dictionary<string, string>? environment = null)
     {
-        var start = new ProcessStartInfo(file, arguments)
+        var start = new ProcessStartInfo(file.Contains('/') ? Path.Combine(TestPaths.RepositoryRoot, file) : file, arguments)
         {
             WorkingDirectory = TestPaths.RepositoryRoot,
             RedirectStandardInput = true,
