@@ -42,3 +42,12 @@ require_chromium() {
     found=$(find_chromium) || die "Chromium is missing: install the package chromium and start again (the attempt is logged in $1)"
     export PATHPORTAL_CHROMIUM=$found
 }
+
+# offer_compose_client LOG  For the tests of the container files, which say so when they have to do without.
+offer_compose_client() {
+    if have docker-compose || { have docker && docker compose version >/dev/null 2>&1; } || ! can_install; then return; fi
+    say "Installing a compose client"
+    local package=docker-compose
+    if apt-cache show docker-compose-v2 >/dev/null 2>&1; then package=docker-compose-v2; fi
+    apt_install "$1" "$package" || :
+}

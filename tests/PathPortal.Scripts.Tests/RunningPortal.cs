@@ -11,6 +11,8 @@ internal sealed class RunningPortal : IAsyncDisposable
     // A fresh clone builds first and a busy machine takes its time; nothing here is a measurement.
     private static readonly TimeSpan Patience = TimeSpan.FromMinutes(5);
 
+    private static readonly string Script = Path.Combine(TestPaths.RepositoryRoot, "scripts", "run");
+
     private readonly ConcurrentQueue<string> _lines = new();
     private readonly TaskCompletionSource _ready = new(TaskCreationOptions.RunContinuationsAsynchronously);
     private readonly Process _process;
@@ -28,16 +30,11 @@ internal sealed class RunningPortal : IAsyncDisposable
 
     public string Output => string.Join('\n', _lines);
 
-    /// <summary>Starts with INT at its default, which a test run from a background shell would otherwise hand on as ignored.</summary>
-    public static RunningPortal Start(Installation at, params string[] wrapper)
-    {
-        string[] command = [.. wrapper, "env", "--default-signal=INT", Path.Combine(TestPaths.RepositoryRoot, "scripts", "run")];
-        return Launch(at, command);
-    }
+    public static RunningPortal Start(Installation at) => Launch(at, Script);
 
     /// <summary>Starts on a terminal of its own.</summary>
     public static RunningPortal StartOnTerminal(Installation at) =>
-        Launch(at, ["script", "--quiet", "--return", "--flush", "--command", Path.Combine(TestPaths.RepositoryRoot, "scripts", "run"), "/dev/null"]);
+        Launch(at, "script", "--quiet", "--return", "--flush", "--command", Script, "/dev/null");
 
     /// <summary>Waits for the line that names the address; a start that ends before is a failure that shows what it said.</summary>
     public async Task WaitUntilReadyAsync()
@@ -74,9 +71,10 @@ internal sealed class RunningPortal : IAsyncDisposable
         _process.Dispose();
     }
 
-    private static RunningPortal Launch(Installation at, string[] command)
+    private static RunningPortal Launch(Installation at, params string[] command)
     {
-        var start = new ProcessStartInfo(command[0], command[1..])
+        // A test run that was itself started in the background would hand on INT as ignored, which no shell can undo.
+        var start = new ProcessStartInfo("env", ["--default-signal=INT", .. command])
         {
             RedirectStandardInput = true,
             RedirectStandardOutput = true,
