@@ -1,3 +1,4 @@
+using PathPortal.Engine.Arms;
 using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Tests.Published;
 
@@ -31,6 +32,37 @@ public sealed class EulerAnglesTests
 
         Approximately.Equal(
             PublishedCase.Numbers(published.Expected.GetProperty("zyz")), [angles.First, angles.Second, angles.Third], 1e-12, published.Source);
+    }
+
+    [Theory]
+    [InlineData("JAC-09", EulerConvention.MovingZyz, "alpha", "beta", "gamma", "rates")]
+    [InlineData("JAC-10", EulerConvention.MovingZyx, "yaw", "pitch", "roll", "rates_yaw_pitch_roll")]
+    public void ToMatrix_MovedAtPublishedRates_TurnsAtThePublishedAngularVelocity(
+        string id, EulerConvention convention, string first, string second, string third, string rates)
+    {
+        var published = PublishedCase.Get(id);
+        var rate = published.Input(rates);
+        const double h = 1e-5;
+        RotationMatrix After(double time) => new EulerAngles(
+            convention,
+            published.InputNumber(first) + time * rate[0],
+            published.InputNumber(second) + time * rate[1],
+            published.InputNumber(third) + time * rate[2]).ToMatrix();
+        var omega = 1 / (2 * h) * RotationVector.Of(After(h) * After(-h).Transposed());
+
+        // rad/s; central differences over 1e-5 s: 1e-10 in the square of the step, 1e-11 in rounding.
+        Approximately.Equal(PublishedArm.Vector(published.Expected.GetProperty("omega")), omega, 1e-9, published.Source);
+    }
+
+    [Fact]
+    public void FromMatrix_FlangeOfAPublishedArm_HasThePublishedZyzAngles()
+    {
+        var published = PublishedCase.Get("JAC-11");
+        var flange = ArmPose.Compute(PublishedArm.Of(published), published.Input("q")).Flange;
+        var angles = EulerAngles.FromMatrix(EulerConvention.MovingZyz, flange.Rotation);
+
+        Approximately.Equal(
+            PublishedCase.Numbers(published.Expected.GetProperty("zyz")), [angles.First, angles.Second, angles.Third], published.Tolerance, published.Source);
     }
 
     [Theory]
