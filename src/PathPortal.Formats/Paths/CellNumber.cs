@@ -70,7 +70,7 @@ internal static class CellNumber
             <= 0 and > -7 => "0." + new string('0', -whole) + digits,
             > 0 and <= 21 when whole >= digits.Length => digits + new string('0', whole - digits.Length),
             > 0 and <= 21 => digits[..whole] + "." + digits[whole..],
-            _ => string.Create(CultureInfo.InvariantCulture, $"{digits}e{whole - digits.Length}"),
+            _ => string.Create(CultureInfo.InvariantCulture, $"{digits[0]}{(digits.Length > 1 ? "." : "")}{digits[1..]}e{whole - 1}"),
         };
         return negative ? "-" + plain : plain;
     }

@@ -13,7 +13,7 @@ public static class PathExample
         -20,0,50,,,,joint,,40,,,,,,approach
         -20,0,2,,,,straight,120,,,,,,0.2,"nozzle down, wait"
         0,0,2,,,,,60,,,,,axis,,bead begins behind this point
-        200,0,2,,,,,,,on,5,10,,,first side
+        200,0,2,,,,,,,on,5,1,,,first side
         200,120,2,,,,,,,,,,,0.1,second side
         200,130,2,,,,,120,,off,,,,,off the edge
         200,130,50,,,,,250,,,,,,,clear

@@ -33,7 +33,7 @@ public sealed class PathCsvReadTests
         Assert.Equal(0.4, points[1].JointSpeedShare);
         Assert.Equal(MotionKind.Straight, points[3].Motion);
         Assert.Equal((0.06, TaskKind.Axis, true), (points[5].Speed, points[5].Task, points[5].ProcessOn));
-        Assert.Equal((0.01, 0.005, 0.0), (points[4].CornerReach, points[4].LeadIn, points[5].LeadIn));
+        Assert.Equal((0.001, 0.005, 0.0), (points[4].CornerReach, points[4].LeadIn, points[5].LeadIn));
         Assert.Equal(points[0].Orientation, points[8].Orientation);
         Assert.Equal("nozzle down, wait", points[2].Label);
         Assert.Equal(6, points[2].SourceLine);
