@@ -7,6 +7,7 @@ using PathPortal.Portal.Jobs;
 using PathPortal.Web.Features.Arms;
 using PathPortal.Web.Features.Cells;
 using PathPortal.Web.Features.Programs;
+using PathPortal.Web.Features.Runs;
 using PathPortal.Web.Features.SignIn;
 using PathPortal.Web.Hosting;
 using PathPortal.Web.Layout;
@@ -38,6 +39,7 @@ services.AddScoped<SignInHandler>();
 services.AddRunQueue();
 services.AddPortalHandlers();
 services.AddPortalQueries();
+services.AddRunSamples();
 
 var app = builder.Build();
 
@@ -59,6 +61,7 @@ app.MapArmFiles();
 app.MapCellFiles();
 app.MapUpload();
 app.MapFiles();
+app.MapRuns();
 app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
 
 await app.RunAsync();

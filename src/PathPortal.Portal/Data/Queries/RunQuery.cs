@@ -16,6 +16,10 @@ public sealed class RunQuery(PortalDb db)
     public Task<Outcome<RunProgressLine>> ReadProgressAsync(Actor actor, Guid runId, CancellationToken cancellation = default) =>
         db.ReadAsync(actor, session => ReadProgressAsync(session, runId, cancellation), cancellation);
 
+    /// <summary>The stored bins alone, packed.</summary>
+    public Task<Outcome<byte[]>> ReadBinsAsync(Actor actor, Guid runId, CancellationToken cancellation = default) =>
+        db.ReadAsync(actor, session => ReadBinsAsync(session, runId, cancellation), cancellation);
+
     private static async Task<Outcome<RunDetails>> ReadAsync(PortalSession session, Guid runId, Guid? requestId, CancellationToken cancellation)
     {
         var db = session.Db;
@@ -69,5 +73,16 @@ public sealed class RunQuery(PortalDb db)
         if (found is null)
             return Refusal.NotFound("run");
         return access.Refuse(found.PlantId, Right.Read, "run") is { } refusal ? refusal : found.Line;
+    }
+
+    private static async Task<Outcome<byte[]>> ReadBinsAsync(PortalSession session, Guid runId, CancellationToken cancellation)
+    {
+        var access = await session.AccessAsync(cancellation);
+        var found = await session.Db.Runs.Where(r => r.Id == runId).Select(r => new { r.PlantId, r.Bins }).FirstOrDefaultAsync(cancellation);
+        if (found is null)
+            return Refusal.NotFound("run");
+        if (access.Refuse(found.PlantId, Right.Read, "run") is { } refusal)
+            return refusal;
+        return found.Bins is { } bins ? bins : Refusal.NotFound("run");
     }
 }

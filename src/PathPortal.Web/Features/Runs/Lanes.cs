@@ -43,9 +43,9 @@ public static class Lanes
             var value = (given - allowance) * 1e3;
             var same = limits.FindIndex(l => Math.Abs(l.Value - value) < 1e-9);
             if (same >= 0)
-                limits[same] = limits[same] with { Label = $"{limits[same].Label}, {name}" };
+                limits[same] = limits[same] with { Label = limits[same].Label.Replace(" allowed", $" and {name} allowed", StringComparison.Ordinal) };
             else
-                limits.Add(new(value, name));
+                limits.Add(new(value, $"{name} allowed {Format.Number(value, 2)}"));
         }
     }
 

@@ -29,9 +29,13 @@ public sealed record RunInputs
 
     public required int NumericsVersion { get; init; }
 
-    public required DateTimeOffset FinishedAt { get; init; }
+    /// <summary>Null until there is a result.</summary>
+    public DateTimeOffset? FinishedAt { get; init; }
 
-    public required string Worker { get; init; }
+    public string? Worker { get; init; }
+
+    /// <summary>Address of the review that rests on this revision and cell; null where there is none.</summary>
+    public string? Review { get; init; }
 
     /// <param name="Href">Null where there is no page for it.</param>
     /// <param name="Sha256">Null where a digest says nothing, such as for a program.</param>

@@ -23,6 +23,9 @@ public sealed record RunView
 
     public required RunInputs Inputs { get; init; }
 
+    /// <summary>The run that took this one's place as evidence for the revision on the cell; null when this is the current one.</summary>
+    public Guid? Newer { get; init; }
+
     /// <summary>The cursor starts here: at the worst place.</summary>
     public Place? Worst =>
         Summary.Outcomes.Where(o => o.Place is not null)

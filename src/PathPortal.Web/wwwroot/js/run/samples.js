@@ -58,7 +58,9 @@ export class SampleSource {
 
   async #get(path, signal) {
     const response = await fetch(`${this.href}/${path}`, { signal: signal ? AbortSignal.any([signal, this.#stop.signal]) : this.#stop.signal, credentials: "same-origin" });
-    if (!response.ok || response.redirected) throw new Error(response.redirected ? "You are signed out." : `The portal answered ${response.status}.`);
+    if (response.redirected) throw new Error("You are signed out.");
+    if (response.status === 409) throw new Error(await response.text());
+    if (!response.ok) throw new Error(`The portal answered ${response.status}.`);
     return unpack(await response.arrayBuffer());
   }
 }

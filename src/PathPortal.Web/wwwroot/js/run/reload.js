@@ -1,0 +1,4 @@
+// What the page waited for is there.
+export function start() {
+  location.reload();
+}
