@@ -12,8 +12,10 @@ public static class QueryServices
         .AddSingleton<CriteriaQuery>()
         .AddSingleton<FileQuery>()
         .AddSingleton<FleetQuery>()
+        .AddSingleton<HistoryQuery>()
         .AddSingleton<ProgramQuery>()
         .AddSingleton<ReviewQuery>()
         .AddSingleton<RunQuery>()
+        .AddSingleton<SetupQuery>()
         .AddSingleton<WaitingQuery>();
 }
