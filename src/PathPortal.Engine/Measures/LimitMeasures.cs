@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using PathPortal.Engine.Paths;
 using PathPortal.Engine.Verdicts;
 
 namespace PathPortal.Engine.Measures;
@@ -13,9 +14,10 @@ internal static class LimitMeasures
         var measures = new List<LimitMeasure>();
         void Tolerance(Criterion criterion, double[] size, double? tolerance, double allowance, string unit)
         {
-            if (tolerance is { } given)
+            if (tolerance is { } given && IsAsked(criteria, path, criterion))
             {
-                measures.Add(new ToleranceMeasure(criterion, size, samples.Process, given, allowance, unit));
+                var applies = criterion == Criterion.ToolAxis ? AxisConstrained(path, samples) : samples.Process;
+                measures.Add(new ToleranceMeasure(criterion, size, applies, given, allowance, unit));
             }
         }
 
@@ -34,4 +36,27 @@ internal static class LimitMeasures
 
         return [.. measures];
     }
+
+    /// <summary>
+    /// False for a criterion whose tolerance the sheet does not give, and for the tool axis where every process section leaves the orientation free.
+    /// </summary>
+    public static bool IsAsked(CriteriaSheet criteria, ToolPath path, Criterion criterion) => criterion switch
+    {
+        Criterion.AcrossPath => criteria.AcrossTolerance is not null,
+        Criterion.StandOff => criteria.StandOffTolerance is not null,
+        Criterion.ToolAxis => criteria.AxisTolerance is not null && !LeavesOrientationFree(path),
+        Criterion.Tracking => criteria.TrackingTolerance is not null,
+        Criterion.ToolSpeed => criteria.ToolSpeedTolerance is not null,
+        _ => true,
+    };
+
+    private static bool LeavesOrientationFree(ToolPath path)
+    {
+        var process = path.Waypoints.Where(w => w.ProcessOn);
+        return process.Any() && process.All(w => w.Task == TaskKind.Point);
+    }
+
+    // A ball-shaped tool has no axis to hold.
+    private static bool[] AxisConstrained(ToolPath path, RunSamples samples) =>
+        [.. samples.Process.Select((process, k) => process && path.Waypoints[samples.Waypoint[k]].Task != TaskKind.Point)];
 }

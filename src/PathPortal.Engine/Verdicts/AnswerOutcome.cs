@@ -1,5 +1,6 @@
 using System.Globalization;
 using PathPortal.Engine.Arms;
+using PathPortal.Engine.Measures;
 
 namespace PathPortal.Engine.Verdicts;
 
@@ -20,7 +21,7 @@ internal static class AnswerOutcome
         {
             true => CriterionStatus.Pass,
             false => CriterionStatus.Fail,
-            null when !IsAsked(scenario.Criteria, criterion) => CriterionStatus.NotAsked,
+            null when !LimitMeasures.IsAsked(scenario.Criteria, scenario.Path, criterion) => CriterionStatus.NotAsked,
             null => CriterionStatus.NotAssessable,
         };
         return new()
@@ -29,19 +30,9 @@ internal static class AnswerOutcome
             Status = status,
             Binding = Judgement.Binds(scenario.Criteria, criterion),
             NearThreshold = Judgement.NearOf(scenario.Criteria, criterion),
-            Reason = status is CriterionStatus.Fail or CriterionStatus.NotAssessable ? reason ?? "No reason is known." : null,
+            Reason = status is CriterionStatus.Fail or CriterionStatus.NotAssessable ? reason ?? "It could not be judged." : null,
         };
     }
-
-    private static bool IsAsked(CriteriaSheet criteria, Criterion criterion) => criterion switch
-    {
-        Criterion.AcrossPath => criteria.AcrossTolerance is not null,
-        Criterion.StandOff => criteria.StandOffTolerance is not null,
-        Criterion.ToolAxis => criteria.AxisTolerance is not null,
-        Criterion.Tracking => criteria.TrackingTolerance is not null,
-        Criterion.ToolSpeed => criteria.ToolSpeedTolerance is not null,
-        _ => true,
-    };
 
     private static (bool? Answer, string? Reason) StartInside(ArmModel arm, double[]? start)
     {

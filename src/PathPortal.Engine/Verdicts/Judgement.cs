@@ -65,7 +65,8 @@ public sealed class Judgement
     {
         ArgumentNullException.ThrowIfNull(scenario);
         ArgumentNullException.ThrowIfNull(facts);
-        var start = scenario.Start is { IsDefault: false } given && given.Length == scenario.Arm.Joints.Length ? given.ToArray() : null;
+        var joints = scenario.Arm.Joints.IsDefault ? 0 : scenario.Arm.Joints.Length;
+        var start = scenario.Start is { IsDefault: false } given && given.Length == joints ? given.ToArray() : null;
         var outcomes = Enum.GetValues<Criterion>().Order().Select(c => AnswerOutcome.Of(scenario, c, facts, start));
         return new(scenario, null, [], [.. outcomes]);
     }

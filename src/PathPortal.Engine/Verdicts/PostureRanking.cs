@@ -2,7 +2,8 @@ namespace PathPortal.Engine.Verdicts;
 
 /// <summary>
 /// Orders the judgements of start postures, best first: by verdict (pass, not assessable, fail), then by worst use, then by how many binding criteria
-/// fail, then by the sum of uses, which tells two postures apart that fail or pass alike.
+/// fail, then by the sum of uses, which tells two postures apart that fail or pass alike. Uses count to six decimals: postures a whole turn apart
+/// differ in the last bits and are no better for it.
 /// </summary>
 public sealed class PostureRanking : IComparer<Judgement>
 {
@@ -16,7 +17,7 @@ public sealed class PostureRanking : IComparer<Judgement>
         ArgumentNullException.ThrowIfNull(x);
         ArgumentNullException.ThrowIfNull(y);
         var order = Rank(x.Verdict).CompareTo(Rank(y.Verdict));
-        order = order != 0 ? order : x.WorstUse.CompareTo(y.WorstUse);
+        order = order != 0 ? order : Rounded(x.WorstUse).CompareTo(Rounded(y.WorstUse));
         order = order != 0 ? order : Failures(x).CompareTo(Failures(y));
         return order != 0 ? order : Sum(x).CompareTo(Sum(y));
     }
@@ -30,5 +31,8 @@ public sealed class PostureRanking : IComparer<Judgement>
 
     private static int Failures(Judgement judgement) => judgement.Outcomes.Count(o => o is { Binding: true, Status: CriterionStatus.Fail });
 
-    private static double Sum(Judgement judgement) => judgement.Outcomes.Sum(o => Math.Min(LargestCounted, o.WorstUse ?? 0));
+    private static double Sum(Judgement judgement) => Rounded(
+        judgement.Outcomes.Sum(o => Math.Min(LargestCounted, o.WorstUse ?? 0)));
+
+    private static double Rounded(double use) => Math.Round(use, 6);
 }

@@ -1,4 +1,4 @@
-using PathPortal.Engine.Arms;
+using PathPortal.Engine.Paths;
 using PathPortal.Engine.Verdicts;
 
 namespace PathPortal.Engine.Tests.Measures;
@@ -43,6 +43,33 @@ public sealed class LimitMeasureTests
         samples.ToolAxisAngle[150] = 0.015;
 
         AssertWorst(samples, Criterion.ToolAxis, 150, (0.015 + 0.001) / 0.02, value: 0.015, limit: 0.019, unit: "rad");
+    }
+
+    [Fact]
+    public void ToolAxis_TaskThatLeavesOrientationFree_DoesNotCount()
+    {
+        // Waypoint 2 becomes a point task (samples 100 to 199); waypoint 3 keeps its axis.
+        var waypoints = TestScenario.Complete.Path.Waypoints;
+        var scenario = TestScenario.Complete with { Path = new(waypoints.SetItem(2, waypoints[2] with { Task = TaskKind.Point })) };
+        var samples = TestScenario.Quiet();
+        (samples.ToolAxisAngle[150], samples.ToolAxisAngle[250]) = (1, 0.005);
+        var outcome = Judgement.Of(scenario, samples, TestScenario.Fine).Outcomes.Single(o => o.Criterion == Criterion.ToolAxis);
+
+        Assert.Equal(250, outcome.Place!.Value.Sample);
+        Assert.True(double.IsNaN(samples.Use[Criterion.ToolAxis][150]));
+    }
+
+    [Fact]
+    public void ToolAxis_NoProcessSectionConstrainsIt_IsNotAsked()
+    {
+        var scenario = TestScenario.Complete with
+        {
+            Path = new([.. TestScenario.Complete.Path.Waypoints.Select(w => w.ProcessOn ? w with { Task = TaskKind.Point } : w)]),
+        };
+        var judgement = Judgement.Of(scenario, TestScenario.Quiet(), TestScenario.Fine);
+
+        Assert.Equal(CriterionStatus.NotAsked, judgement.Outcomes.Single(o => o.Criterion == Criterion.ToolAxis).Status);
+        Assert.Equal(Verdict.Pass, judgement.Verdict);
     }
 
     [Fact]

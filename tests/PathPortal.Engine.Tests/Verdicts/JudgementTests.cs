@@ -152,6 +152,24 @@ public sealed class JudgementTests
         Assert.Equal([good, tight, bad, worse], shuffled.Order(PostureRanking.Instance));
     }
 
+    [Fact]
+    public void Ranking_WorstUsesThatDifferInTheLastBits_LooksAtTheRest()
+    {
+        Judgement With(double demand, double q)
+        {
+            var samples = TestScenario.Quiet();
+            samples.JointSpeedDemands[0][9] = demand;
+            samples.Joints[5][9] = q;
+            return Judge(samples);
+        }
+
+        // The second is worse by 1e-12 in its worst use and has far more room in joint 6.
+        var (wound, free) = (With(2.5, 1.85), With(2.5 + 1e-12, 0));
+
+        Assert.True(wound.WorstUse < free.WorstUse);
+        Assert.Equal([free, wound], new[] { wound, free }.Order(PostureRanking.Instance));
+    }
+
     private static Judgement Judge(RunSamples samples) => Judgement.Of(TestScenario.Complete, samples, TestScenario.Fine);
 
     private static CriterionOutcome Outcome(Judgement judgement, Criterion criterion) =>
