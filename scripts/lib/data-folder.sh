@@ -39,17 +39,22 @@ secret() {
     cat -- "$file"
 }
 
-# start_private_database LOG  Makes the cluster at the first start, starts it, and sets owner_db, web_db and worker_db.
-start_private_database() {
-    local log=$1 cluster=$DATA/postgres version='' port try
+# find_private_server  Sees that the server is there which the cluster needs, before the long work begins.
+find_private_server() {
+    local version=''
     # shellcheck disable=SC2034 # read by postgres.sh
     PG_NPM_FOLDER=$DATA/npm
-    if [[ -f $cluster/PG_VERSION ]]; then version=$(as_pg cat "$cluster/PG_VERSION"); fi
+    if [[ -d $DATA/postgres ]]; then version=$(as_pg cat "$DATA/postgres/PG_VERSION"); fi
     pg_require "$(keep_log packages)" "$version"
+}
+
+# start_private_database LOG  Makes the cluster at the first start, starts it, and sets owner_db, web_db and worker_db.
+start_private_database() {
+    local log=$1 cluster=$DATA/postgres port try
     mkdir -p "$DATA/socket"
     if is_root; then chown nobody "$DATA/socket"; fi
     chmod 700 "$DATA/socket"
-    if [[ -z $version ]]; then
+    if [[ ! -d $cluster ]]; then
         say "Making a private database in $DATA"
         # shellcheck disable=SC2034 # read by postgres.sh
         pg_superuser_password=$(secret superuser)

@@ -9,7 +9,7 @@ namespace PathPortal.Scripts.Tests;
 internal sealed class RunningPortal : IAsyncDisposable
 {
     // A fresh clone builds first and a busy machine takes its time; nothing here is a measurement.
-    private static readonly TimeSpan Patience = TimeSpan.FromMinutes(5);
+    private static readonly TimeSpan Patience = TimeSpan.FromMinutes(15);
 
     private static readonly string Script = Path.Combine(TestPaths.RepositoryRoot, "scripts", "run");
 
