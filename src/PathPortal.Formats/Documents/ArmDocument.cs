@@ -12,6 +12,9 @@ public sealed record ArmDocument
 {
     public const string FormatName = "pathportal-arm-1";
 
+    /// <summary>Longest note.</summary>
+    public const int MostNoteCharacters = 4000;
+
     public string Name { get; set; } = "";
 
     /// <summary>Free text: what kind of arm, where its numbers come from, or that it is invented.</summary>

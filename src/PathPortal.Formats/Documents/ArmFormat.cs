@@ -21,7 +21,8 @@ internal static class ArmFormat
             // What the engine cannot run on must not be saved either.
             foreach (var problem in ArmCheck.Find(ArmConversion.ToArmModel(a)))
             {
-                problems.Add(0, 0, "joints", "", problem.Expected, $"No simulation can run on this arm: {problem.Place}, {problem.Quantity}.");
+                problems.Add(
+                    0, 0, "joints", "", problem.Expected, $"No simulation can run on this arm: {problem.Place}, {problem.Quantity}.");
             }
         }));
 }

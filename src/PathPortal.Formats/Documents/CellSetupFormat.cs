@@ -40,7 +40,8 @@ internal static class CellSetupFormat
         .With(Number("tool_acceleration_mm_s2", NumberRule.AboveZero("mm/s²"), c => c.ToolAccelerationMmS2, (c, v) => c.ToolAccelerationMmS2 = v))
         .With(Number("tool_turn_speed_deg_s", NumberRule.AboveZero("degrees/s"), c => c.ToolTurnSpeedDegS, (c, v) => c.ToolTurnSpeedDegS = v))
         .With(Number(
-            "tool_turn_acceleration_deg_s2", NumberRule.AboveZero("degrees/s²"), c => c.ToolTurnAccelerationDegS2, (c, v) => c.ToolTurnAccelerationDegS2 = v));
+            "tool_turn_acceleration_deg_s2", NumberRule.AboveZero("degrees/s²"), c => c.ToolTurnAccelerationDegS2,
+            (c, v) => c.ToolTurnAccelerationDegS2 = v));
 
     public static DocumentFormat<CellSetupDocument> Format { get; } = new(CellSetupDocument.FormatName, new Shape<CellSetupDocument>()
         .With(new TextField<CellSetupDocument>("note", TextRule.Note, s => s.Note, (s, v) => s.Note = v))

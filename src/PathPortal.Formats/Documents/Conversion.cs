@@ -15,5 +15,6 @@ internal static class Conversion
     private static RotationMatrix ToRotation(OrientationDocument o) => o.IsQuaternion
         ? RotationMatrix.FromQuaternion(UnitQuaternion.FromComponents(o.W, o.X, o.Y, o.Z))
         : EulerAngles.ToMatrix(
-            OrientationConvention.ToEuler(o.Convention), Angle.FromDegrees(o.FirstDeg), Angle.FromDegrees(o.SecondDeg), Angle.FromDegrees(o.ThirdDeg));
+            OrientationConvention.ToEuler(o.Convention), Angle.FromDegrees(o.FirstDeg), Angle.FromDegrees(o.SecondDeg),
+            Angle.FromDegrees(o.ThirdDeg));
 }

@@ -28,7 +28,8 @@ internal static class CriteriaFormat
         .With(new NearField("near_percent")));
 
     private static NumberField<CriteriaDocument> Asked(
-        string name, NumberRule rule, Func<CriteriaDocument, double?> get, Action<CriteriaDocument, double?> set) => new(name, false, rule, get, set);
+        string name, NumberRule rule, Func<CriteriaDocument, double?> get, Action<CriteriaDocument, double?> set) =>
+        new(name, false, rule, get, set);
 
     private static NumberField<CriteriaDocument> Given(
         string name, NumberRule rule, Func<CriteriaDocument, double?> get, Action<CriteriaDocument, double> set) =>

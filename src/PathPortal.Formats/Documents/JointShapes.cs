@@ -31,7 +31,8 @@ internal static class JointShapes
     private static Shape<JointDocument> Frame(Shape<JointDocument> shape) => shape
         .With(new ObjectField<JointDocument, PoseDocument>("pose_in_link_before", true, _ => PoseShapes.Pose, j => j.Pose, (j, v) => j.Pose = v))
         .With(new NumbersField<JointDocument>(
-            "axis", 3, NumberRule.Any("", 1e6), j => [j.AxisX, j.AxisY, j.AxisZ], (j, v) => (j.AxisX, j.AxisY, j.AxisZ) = (v[0], v[1], v[2])))
+            "axis", 3, NumberRule.Any("", 1e6), j => [j.AxisX, j.AxisY, j.AxisZ],
+            (j, v) => (j.AxisX, j.AxisY, j.AxisZ) = (v[0], v[1], v[2])))
         .With(new NumberField<JointDocument>("zero_deg", true, NumberRule.Any("degrees", 36_000), j => j.Zero, (j, v) => j.Zero = v ?? 0), IsRevolute)
         .With(
             new NumberField<JointDocument>("zero_mm", true, NumberRule.Any("mm", PoseShapes.FarthestMm), j => j.Zero, (j, v) => j.Zero = v ?? 0),
@@ -41,7 +42,9 @@ internal static class JointShapes
             var length = Math.Sqrt(j.AxisX * j.AxisX + j.AxisY * j.AxisY + j.AxisZ * j.AxisZ);
             if (!(length > 1e-9))
             {
-                problems.Add(0, 0, path + ".axis", "length " + length.ToString("R", CultureInfo.InvariantCulture), "a direction", "The axis has no direction.");
+                problems.Add(
+                    0, 0, path + ".axis", "length " + length.ToString("R", CultureInfo.InvariantCulture), "a direction",
+                    "The axis has no direction.");
             }
         });
 
@@ -68,7 +71,8 @@ internal static class JointShapes
     }
 
     private static ObjectField<JointLimitsDocument, LimitDocument> Limit(
-        string name, string unit, NumberRule rule, Func<JointLimitsDocument, LimitDocument?> get, Action<JointLimitsDocument, LimitDocument> set)
+        string name, string unit, NumberRule rule,
+        Func<JointLimitsDocument, LimitDocument?> get, Action<JointLimitsDocument, LimitDocument> set)
     {
         var shape = new Shape<LimitDocument>()
             .With(new NumberField<LimitDocument>(unit, true, rule, l => l.Value, (l, v) => l.Value = v ?? 0))
@@ -80,7 +84,9 @@ internal static class JointShapes
     {
         if (turning && limits.Continuous && (limits.Low ?? limits.High) is not null)
         {
-            problems.Add(0, 0, path + (limits.Low is null ? ".high" : ".low"), "", "no low and no high", "A joint that turns without end has no position limits.");
+            problems.Add(
+                0, 0, path + (limits.Low is null ? ".high" : ".low"), "", "no low and no high",
+                "A joint that turns without end has no position limits.");
         }
         else if (!turning && limits.Continuous)
         {
@@ -94,7 +100,8 @@ internal static class JointShapes
         {
             problems.Add(
                 0, 0, $"{path}.high.{unit}", limits.High.Value.ToString("R", CultureInfo.InvariantCulture),
-                string.Create(CultureInfo.InvariantCulture, $"a number above low, {limits.Low.Value} {unit}"), "The high limit is not above the low one.");
+                string.Create(CultureInfo.InvariantCulture, $"a number above low, {limits.Low.Value} {unit}"),
+                "The high limit is not above the low one.");
         }
     }
 }

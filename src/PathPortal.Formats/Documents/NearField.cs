@@ -29,7 +29,8 @@ internal sealed class NearField(string name) : Field<CriteriaDocument>(name, req
             if (known.Word is null)
             {
                 problems.Add(
-                    line, column, value.Path, word, NearestName.Hint(word, [.. Criteria.Select(c => c.Word)]), "This is not a criterion with a limit.");
+                    line, column, value.Path, word, NearestName.Hint(word, [.. Criteria.Select(c => c.Word)]),
+                    "This is not a criterion with a limit.");
             }
             else if (NumberField<CriteriaDocument>.TryNumber(value, Rule, problems, out var number))
             {
@@ -49,7 +50,9 @@ internal sealed class NearField(string name) : Field<CriteriaDocument>(name, req
             }
             else if (!Rule.Holds(percent))
             {
-                Wrong($"{path}.{word}", percent.ToString("R", CultureInfo.InvariantCulture), Rule.Expected, "The number is outside its range.", problems);
+                Wrong(
+                    $"{path}.{word}", percent.ToString("R", CultureInfo.InvariantCulture), Rule.Expected,
+                    "The number is outside its range.", problems);
             }
         }
     }

@@ -32,7 +32,8 @@ internal static class PoseShapes
 
     public static Shape<PoseDocument> Pose { get; } = new Shape<PoseDocument>()
         .With(new NumbersField<PoseDocument>(
-            "position_mm", 3, NumberRule.Any("mm", FarthestMm), p => [p.XMm, p.YMm, p.ZMm], (p, v) => (p.XMm, p.YMm, p.ZMm) = (v[0], v[1], v[2])))
+            "position_mm", 3, NumberRule.Any("mm", FarthestMm), p => [p.XMm, p.YMm, p.ZMm],
+            (p, v) => (p.XMm, p.YMm, p.ZMm) = (v[0], v[1], v[2])))
         .With(new ObjectField<PoseDocument, OrientationDocument>(
             "orientation", true, _ => Orientation, p => p.Orientation, (p, v) => p.Orientation = v));
 

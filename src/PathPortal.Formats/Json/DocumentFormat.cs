@@ -38,7 +38,9 @@ internal sealed class DocumentFormat<T>(string formatName, Shape<T> shape)
         var format = named < 0 ? root : root.Properties[named].Value;
         if (named < 0 || format.Kind != JsonValueKind.String || format.Text != formatName)
         {
-            problems.Add(format.Line, format.Column, "format", named < 0 ? "" : format.Shown, $"“{formatName}”", "The document does not name this format.");
+            problems.Add(
+                format.Line, format.Column, "format", named < 0 ? "" : format.Shown, $"“{formatName}”",
+                "The document does not name this format.");
             return ReadResult<T>.Refused(problems);
         }
 

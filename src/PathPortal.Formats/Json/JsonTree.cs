@@ -41,7 +41,8 @@ internal static class JsonTree
             // The reader reports what it was looking at; the last byte it consumed tells where.
             var (line, column) = new LinePlaces(utf8).At(error is JsonException json ? ByteOf(json, utf8) : reader.TokenStartIndex);
             problems.Add(
-                line, column, "", "", "well-formed JSON (RFC 8259), at most 16 levels deep, without comments", "The text is not well-formed JSON here.");
+                line, column, "", "", "well-formed JSON (RFC 8259), at most 16 levels deep, without comments",
+                "The text is not well-formed JSON here.");
             return null;
         }
     }

@@ -48,7 +48,9 @@ internal sealed class ListField<T, TItem>(
             shape(value).Check(items[i], itemPath, problems);
             if (!names.Add(nameOf(items[i])))
             {
-                Wrong(itemPath + ".name", nameOf(items[i]), "a name of its own (capital letters don't count)", "The name is used twice.", problems);
+                Wrong(
+                    itemPath + ".name", nameOf(items[i]), "a name of its own (capital letters don't count)", "The name is used twice.",
+                    problems);
             }
         }
     }

@@ -12,7 +12,8 @@ internal sealed class NumbersField<T>(string name, int count, NumberRule rule, F
     {
         if (part.Kind != JsonValueKind.Array || part.Items.Count != count)
         {
-            Wrong(part, $"a list of {count} numbers{(rule.Unit.Length == 0 ? "" : " in " + rule.Unit)}", "The list does not fit.", problems);
+            Wrong(
+                part, $"a list of {count} numbers{(rule.Unit.Length == 0 ? "" : " in " + rule.Unit)}", "The list does not fit.", problems);
             return;
         }
 

@@ -46,7 +46,8 @@ internal sealed class Shape<T>
             }
             else if (field.Required)
             {
-                problems.Add(part.Line, part.Column, PathOf(part.Path, field.Name), "", $"the property “{field.Name}”", "A property is missing.");
+                problems.Add(
+                    part.Line, part.Column, PathOf(part.Path, field.Name), "", $"the property “{field.Name}”", "A property is missing.");
             }
         }
 

@@ -11,7 +11,7 @@ internal sealed record TextRule(int Least, int Most, bool Lines)
 
     public static TextRule Line { get; } = new(0, 400, false);
 
-    public static TextRule Note { get; } = new(0, 4000, true);
+    public static TextRule Note { get; } = new(0, Documents.ArmDocument.MostNoteCharacters, true);
 
     public string Expected => (Least > 0 ? $"{Least} to {Most} characters" : $"at most {Most} characters")
         + (Lines ? " without hidden characters" : " on one line without hidden characters, no blanks at the ends");

@@ -42,7 +42,8 @@ internal static class CellNumber
             return false;
         }
 
-        return double.TryParse(shifted[..(digits.Length + 1 + written)], Style, CultureInfo.InvariantCulture, out value) && double.IsFinite(value);
+        return double.TryParse(
+            shifted[..(digits.Length + 1 + written)], Style, CultureInfo.InvariantCulture, out value) && double.IsFinite(value);
     }
 
     /// <summary>Shortest text that <see cref="TryParse"/> with the opposite shift reads back as the same number.</summary>

@@ -81,7 +81,9 @@ internal sealed class PathChecks(PathRows rows, PathLayout layout, ProblemList p
 
         if (i == 0 || i == Count - 1)
         {
-            Remark(i, _cornerAt, i == 0 ? "The path starts here: the corner is not rounded." : "The path ends here: the corner is not rounded.");
+            Remark(
+                i, _cornerAt,
+                i == 0 ? "The path starts here: the corner is not rounded." : "The path ends here: the corner is not rounded.");
             rows.Waypoints[i] = point with { CornerReach = 0 };
             return;
         }

@@ -47,7 +47,8 @@ internal sealed record PathColumn(string Name, PathQuantity Quantity, int Part, 
                 foreach (var unit in (string[])["deg", "rad"])
                 {
                     yield return new(
-                        string.Create(CultureInfo.InvariantCulture, $"{convention}_{part + 1}_{unit}"), PathQuantity.Angles, part, unit, convention);
+                        string.Create(CultureInfo.InvariantCulture, $"{convention}_{part + 1}_{unit}"), PathQuantity.Angles, part, unit,
+                        convention);
                 }
             }
         }

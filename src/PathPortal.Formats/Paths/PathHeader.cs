@@ -65,7 +65,9 @@ internal sealed class PathHeader(CsvRows rows, ProblemList problems)
         var column = rows.ColumnOf(first);
         if (text.StartsWith('<') || text.StartsWith('{') || text.StartsWith('['))
         {
-            problems.Add(first.Line, column, "", text, "a header line with column names, then rows of numbers", "This looks like XML or JSON, not like a path file.");
+            problems.Add(
+                first.Line, column, "", text, "a header line with column names, then rows of numbers",
+                "This looks like XML or JSON, not like a path file.");
             return false;
         }
 
@@ -75,7 +77,8 @@ internal sealed class PathHeader(CsvRows rows, ProblemList problems)
             if (text.Contains(mark, StringComparison.Ordinal))
             {
                 problems.Add(
-                    first.Line, column + text.IndexOf(mark, StringComparison.Ordinal), "", mark.ToString(), "commas between cells and points in numbers",
+                    first.Line, column + text.IndexOf(mark, StringComparison.Ordinal), "", mark.ToString(),
+                    "commas between cells and points in numbers",
                     $"The cells are separated by {name}.");
                 return false;
             }
@@ -83,7 +86,8 @@ internal sealed class PathHeader(CsvRows rows, ProblemList problems)
 
         if (rows.Cells.All(c => c.Length == 0 || CellNumber.TryParse(rows.Bytes(c), 0, out _)))
         {
-            problems.Add(first.Line, column, "", text, "a header line with column names such as x_mm", "The first line holds no column names.");
+            problems.Add(
+                first.Line, column, "", text, "a header line with column names such as x_mm", "The first line holds no column names.");
             return false;
         }
 
@@ -110,17 +114,20 @@ internal sealed class PathHeader(CsvRows rows, ProblemList problems)
             var unlike = columns.Find(c => c.Quantity == column.Quantity && IsOneUnit(column.Quantity) && !UnitsAgree(c, column));
             if (same == column)
             {
-                problems.Add(cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), "each column once", "The column is there twice.");
+                problems.Add(
+                    cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), "each column once", "The column is there twice.");
             }
             else if (same is not null)
             {
                 problems.Add(
-                    cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), $"one unit; “{same.Name}” is there already", "The same quantity is given in two units.");
+                    cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), $"one unit; “{same.Name}” is there already",
+                    "The same quantity is given in two units.");
             }
             else if (unlike is not null)
             {
                 problems.Add(
-                    cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), $"the unit or convention of “{unlike.Name}”", "Columns of one quantity differ in unit or convention.");
+                    cell.Line, rows.ColumnOf(cell), column.Name, rows.Shown(cell), $"the unit or convention of “{unlike.Name}”",
+                    "Columns of one quantity differ in unit or convention.");
             }
 
             columns.Add(column);

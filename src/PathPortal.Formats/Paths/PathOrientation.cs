@@ -40,7 +40,9 @@ internal sealed class PathOrientation(CsvRows rows, PathLayout layout, ProblemLi
         {
             if (first)
             {
-                Wrong(layout.Orientation[0], "an orientation; only later rows may leave it blank to keep it", "The first row has no orientation.");
+                Wrong(
+                    layout.Orientation[0], "an orientation; only later rows may leave it blank to keep it",
+                    "The first row has no orientation.");
             }
 
             return _last;
@@ -64,7 +66,9 @@ internal sealed class PathOrientation(CsvRows rows, PathLayout layout, ProblemLi
             var at = layout.Orientation[i];
             if (!CellNumber.TryParse(rows.Bytes(rows.Cells[at]), 0, out _values[i]))
             {
-                Wrong(at, "a number" + (layout.Columns[at].Unit.Length == 0 ? "" : " in " + layout.Columns[at].Unit), NumberFault.Of(rows.Shown(rows.Cells[at])));
+                Wrong(
+                    at, "a number" + (layout.Columns[at].Unit.Length == 0 ? "" : " in " + layout.Columns[at].Unit),
+                    NumberFault.Of(rows.Shown(rows.Cells[at])));
                 fine = false;
             }
         }
@@ -115,7 +119,8 @@ internal sealed class PathOrientation(CsvRows rows, PathLayout layout, ProblemLi
             if (!(size <= most))
             {
                 Wrong(
-                    layout.Orientation[i], column.Unit == "deg" ? "an angle from -720 to 720 degrees" : "an angle within two turns, -12.566 to 12.566 rad: are these degrees?",
+                    layout.Orientation[i],
+                    column.Unit == "deg" ? "an angle from -720 to 720 degrees" : "an angle within two turns, -12.566 to 12.566 rad: are these degrees?",
                     "The angle is outside its range.");
                 return _last;
             }

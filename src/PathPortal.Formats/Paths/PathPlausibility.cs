@@ -38,11 +38,14 @@ internal static class PathPlausibility
         var names = string.Join(", ", layout.Position.Select(c => layout.Columns[c].Name));
         if (unit == "mm" && farthest < SmallWorkM)
         {
-            problems.Remark(0, 0, names, string.Create(CultureInfo.InvariantCulture, $"No coordinate is larger than {farthest * 1000:G4} mm. Are these metres?"));
+            problems.Remark(
+                0, 0, names,
+                string.Create(CultureInfo.InvariantCulture, $"No coordinate is larger than {farthest * 1000:G4} mm. Are these metres?"));
         }
         else if (unit == "m" && farthest > LargeWorkM)
         {
-            problems.Remark(0, 0, names, string.Create(CultureInfo.InvariantCulture, $"Coordinates reach {farthest:G4} m. Are these millimetres?"));
+            problems.Remark(
+                0, 0, names, string.Create(CultureInfo.InvariantCulture, $"Coordinates reach {farthest:G4} m. Are these millimetres?"));
         }
     }
 
@@ -56,11 +59,15 @@ internal static class PathPlausibility
         var names = string.Join(", ", layout.Orientation.Select(c => layout.Columns[c].Name));
         if (layout.Columns[layout.Orientation[0]].Unit == "deg" && orientation is { WholeAngles: false, LargestAngle: <= 2 * Math.PI })
         {
-            problems.Remark(0, 0, names, string.Create(CultureInfo.InvariantCulture, $"No angle is larger than {orientation.LargestAngle:G5} degrees. Are these radians?"));
+            problems.Remark(
+                0, 0, names,
+                string.Create(CultureInfo.InvariantCulture, $"No angle is larger than {orientation.LargestAngle:G5} degrees. Are these radians?"));
         }
         else if (layout.Columns[layout.Orientation[0]].Unit == "rad" && orientation.LargestAngle > 2 * Math.PI)
         {
-            problems.Remark(0, 0, names, string.Create(CultureInfo.InvariantCulture, $"Angles reach {orientation.LargestAngle:G5} rad, more than one turn. Are these degrees?"));
+            problems.Remark(
+                0, 0, names,
+                string.Create(CultureInfo.InvariantCulture, $"Angles reach {orientation.LargestAngle:G5} rad, more than one turn. Are these degrees?"));
         }
     }
 
@@ -76,7 +83,9 @@ internal static class PathPlausibility
         var (slowest, fastest) = (moves.Min(), moves.Max());
         if (layout.Columns[at].Unit == "mm/s" && fastest < SlowestUsualSpeed)
         {
-            problems.Remark(0, 0, layout.Columns[at].Name, string.Create(CultureInfo.InvariantCulture, $"No speed is above {fastest * 1000:G4} mm/s. Are these metres per second?"));
+            problems.Remark(
+                0, 0, layout.Columns[at].Name,
+                string.Create(CultureInfo.InvariantCulture, $"No speed is above {fastest * 1000:G4} mm/s. Are these metres per second?"));
         }
         else if (fastest > FastestUsualSpeed)
         {

@@ -56,7 +56,9 @@ internal sealed class PathRows
         {
             if (Waypoints.Count == ReadLimits.PathPoints)
             {
-                _problems.Add(_rows.Line, 1, "", "", $"at most {ReadLimits.PathPoints.ToString("N0", CultureInfo.InvariantCulture)} points", "The path has too many points.");
+                _problems.Add(
+                    _rows.Line, 1, "", "", $"at most {ReadLimits.PathPoints.ToString("N0", CultureInfo.InvariantCulture)} points",
+                    "The path has too many points.");
                 return;
             }
 
@@ -238,7 +240,8 @@ internal sealed class PathRows
         }
         else if (VisibleText.FirstHidden(text) >= 0)
         {
-            Wrong(_labelAt, "text on one line without hidden characters", "The label holds a control, direction or other hidden character.");
+            Wrong(
+                _labelAt, "text on one line without hidden characters", "The label holds a control, direction or other hidden character.");
         }
 
         return text;
@@ -253,7 +256,8 @@ internal sealed class PathRows
         }
         else
         {
-            _problems.Add(_rows.Line, 1, "", "", "a column speed_mm_s or speed_m_s", "A straight move has no speed: there is no speed column.");
+            _problems.Add(
+                _rows.Line, 1, "", "", "a column speed_mm_s or speed_m_s", "A straight move has no speed: there is no speed column.");
             _speed = 1;
         }
     }

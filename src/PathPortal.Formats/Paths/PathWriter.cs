@@ -37,7 +37,8 @@ internal static class PathWriter
         ReadOnlySpan<string> cells =
         [
             CellNumber.Text(p.Position.X, Mm), CellNumber.Text(p.Position.Y, Mm), CellNumber.Text(p.Position.Z, Mm),
-            CellNumber.Text(p.Orientation.W, 0), CellNumber.Text(p.Orientation.X, 0), CellNumber.Text(p.Orientation.Y, 0), CellNumber.Text(p.Orientation.Z, 0),
+            CellNumber.Text(p.Orientation.W, 0), CellNumber.Text(p.Orientation.X, 0), CellNumber.Text(p.Orientation.Y, 0),
+            CellNumber.Text(p.Orientation.Z, 0),
             p.Motion == MotionKind.Joint ? "joint" : "straight",
             p.Task switch { TaskKind.Axis => "axis", TaskKind.Point => "point", _ => "pose" },
             p.ProcessOn ? "on" : "off",

@@ -93,7 +93,8 @@ internal static class SourceText
         }
         catch (DecoderFallbackException)
         {
-            problems.Add(0, 0, "", "", "UTF-8, or valid UTF-16 with a byte order mark", "The text announces UTF-16 but is not valid UTF-16.");
+            problems.Add(
+                0, 0, "", "", "UTF-8, or valid UTF-16 with a byte order mark", "The text announces UTF-16 but is not valid UTF-16.");
             return null;
         }
     }

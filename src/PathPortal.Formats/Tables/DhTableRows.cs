@@ -27,7 +27,10 @@ internal sealed class DhTableRows(CsvRows rows, ProblemList problems)
             var name = rows.Shown(rows.Cells[i]).ToLowerInvariant();
             if (!Names.Contains(name))
             {
-                Wrong(rows.Cells[i], "", NearestName.Of(name, Names) is { } near ? $"a known column; nearest is “{near}”" : "one of " + string.Join(", ", Names), "The column is not known.");
+                Wrong(
+                    rows.Cells[i], "",
+                    NearestName.Of(name, Names) is { } near ? $"a known column; nearest is “{near}”" : "one of " + string.Join(", ", Names),
+                    "The column is not known.");
             }
             else if (!_columns.TryAdd(name, i))
             {
@@ -38,7 +41,9 @@ internal sealed class DhTableRows(CsvRows rows, ProblemList problems)
         var modified = _columns.ContainsKey("a_before_mm") || _columns.ContainsKey("alpha_before_deg");
         if (modified && (_columns.ContainsKey("a_mm") || _columns.ContainsKey("alpha_deg")))
         {
-            problems.Add(rows.Line, 1, "", "", "a_mm, alpha_deg (standard) or a_before_mm, alpha_before_deg (modified)", "The table mixes both conventions.");
+            problems.Add(
+                rows.Line, 1, "", "", "a_mm, alpha_deg (standard) or a_before_mm, alpha_before_deg (modified)",
+                "The table mixes both conventions.");
         }
 
         foreach (var needed in (string[])["theta_deg", "d_mm", modified ? "a_before_mm" : "a_mm", modified ? "alpha_before_deg" : "alpha_deg"])
@@ -99,7 +104,9 @@ internal sealed class DhTableRows(CsvRows rows, ProblemList problems)
         if (Text($"{what}_{other}{per}").Length > 0)
         {
             var cell = rows.Cells[_columns[$"{what}_{other}{per}"]];
-            Wrong(cell, $"{what}_{other}{per}", $"a blank cell, and the limit in {what}_{own}{per}", "The unit does not fit the kind of the joint.");
+            Wrong(
+                cell, $"{what}_{other}{per}", $"a blank cell, and the limit in {what}_{own}{per}",
+                "The unit does not fit the kind of the joint.");
         }
 
         return Number($"{what}_{own}{per}") is { } value ? new() { Value = value, Source = source } : null;

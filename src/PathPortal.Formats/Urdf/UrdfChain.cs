@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using PathPortal.Engine.Arms;
 using PathPortal.Engine.Geometry;
@@ -7,7 +8,7 @@ using PathPortal.Formats.Problems;
 namespace PathPortal.Formats.Urdf;
 
 /// <summary>Makes an arm document of the joints between two links; fixed joints are folded into their neighbours.</summary>
-internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJoints)
+internal sealed class UrdfChain(UrdfTree tree, string robotName, ImmutableArray<FormatRemark> read, bool freeMimicJoints)
 {
     private const string Source = "URDF file";
 
@@ -19,6 +20,11 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
         if (Between(baseLink, tipLink) is not { } joints)
         {
             return ReadResult<ArmDocument>.Refused(_problems);
+        }
+
+        foreach (var remark in read.Where(r => joints.Exists(j => r.Field.StartsWith(VisibleText.Of(j.Field, 100), StringComparison.Ordinal))))
+        {
+            _problems.Remark(remark.Line, remark.Column, remark.Field, remark.Message);
         }
 
         var arm = new ArmDocument
@@ -52,7 +58,10 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
         {
             if (!tree.HasLink(link))
             {
-                _problems.Add(0, 0, "link", link, NearestName.Of(link, tree.Order) is { } near ? $"a link of the file; nearest is “{VisibleText.Of(near)}”" : "a link of the file", "There is no such link.");
+                _problems.Add(
+                    0, 0, "link", link,
+                    NearestName.Of(link, tree.Order) is { } near ? $"a link of the file; nearest is “{VisibleText.Of(near)}”" : "a link of the file",
+                    "There is no such link.");
                 return null;
             }
         }
@@ -62,7 +71,9 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
         {
             if (tree.JointAbove(link) is not { } joint)
             {
-                _problems.Add(0, 0, "link", baseLink, $"a link between the root and “{VisibleText.Of(tipLink)}”", "The base link does not carry the tip link.");
+                _problems.Add(
+                    0, 0, "link", baseLink, $"a link between the root and “{VisibleText.Of(tipLink)}”",
+                    "The base link does not carry the tip link.");
                 return null;
             }
 
@@ -78,7 +89,9 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
     {
         if (joint.Type is UrdfJointType.Floating or UrdfJointType.Planar)
         {
-            Wrong(joint, joint.Type.ToString().ToLowerInvariant(), "base and tip links with no such joint between", "A floating or planar joint cannot be part of a serial arm.");
+            Wrong(
+                joint, joint.Type.ToString().ToLowerInvariant(), "base and tip links with no such joint between",
+                "A floating or planar joint cannot be part of a serial arm.");
         }
 
         if (tree.Resolve(joint.Name) is { } mimic)
@@ -90,7 +103,9 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
             }
             else
             {
-                Wrong(joint, law, "base and tip links with no such joint between", "The joint follows another (mimic); a chain with coupled joints cannot be simulated.");
+                Wrong(
+                    joint, law, "base and tip links with no such joint between",
+                    "The joint follows another (mimic); a chain with coupled joints cannot be simulated.");
             }
         }
 
@@ -125,7 +140,9 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
         }
         else if ((joint.Lower ?? 0) == 0 && (joint.Upper ?? 0) == 0)
         {
-            Remark(joint, "Lower and upper limit are missing or both 0, which means not given: joint positions cannot be judged until they are.");
+            Remark(
+                joint,
+                "Lower and upper limit are missing or both 0, which means not given: joint positions cannot be judged until they are.");
         }
         else
         {
@@ -149,7 +166,8 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
         if (joint.SoftLower != joint.SoftUpper)
         {
             Remark(joint, string.Create(
-                CultureInfo.InvariantCulture, $"Soft limits {joint.SoftLower:R} to {joint.SoftUpper:R} of the safety controller are not used; enter them as limits if they bind."));
+                CultureInfo.InvariantCulture,
+                $"Soft limits {joint.SoftLower:R} to {joint.SoftUpper:R} of the safety controller are not used; enter them as limits if they bind."));
         }
 
         return limits;
@@ -211,8 +229,12 @@ internal sealed class UrdfChain(UrdfTree tree, string robotName, bool freeMimicJ
             _problems.Add(index < 0 ? problem : problem with { Line = _moving[index].Line, Column = _moving[index].Column });
         }
 
-        _problems.Remark(0, 0, "characteristic_length_mm", "A URDF file has no characteristic length: 1000 mm was entered. It decides how singular values read.");
-        _problems.Remark(0, 0, "limits.acceleration", "A URDF file has no acceleration limits: joint acceleration cannot be judged until they are entered.");
+        _problems.Remark(
+            0, 0, "characteristic_length_mm",
+            "A URDF file has no characteristic length: 1000 mm was entered. It decides how singular values read.");
+        _problems.Remark(
+            0, 0, "limits.acceleration",
+            "A URDF file has no acceleration limits: joint acceleration cannot be judged until they are entered.");
     }
 
     private void Wrong(UrdfJoint joint, string value, string expected, string message) =>

@@ -95,7 +95,9 @@ internal sealed class UrdfJointPart(XmlReader reader, IXmlLineInfo lines, UrdfJo
         var values = new double[3];
         if (parts.Length != 3)
         {
-            Wrong(attribute, text, expected, text.Contains(',', StringComparison.Ordinal) ? "There are not three numbers; only a decimal point is read." : "There are not three numbers.");
+            Wrong(
+                attribute, text, expected,
+                text.Contains(',', StringComparison.Ordinal) ? "There are not three numbers; only a decimal point is read." : "There are not three numbers.");
             return null;
         }
 
@@ -103,14 +105,18 @@ internal sealed class UrdfJointPart(XmlReader reader, IXmlLineInfo lines, UrdfJo
         {
             if (!double.TryParse(parts[i], Style, CultureInfo.InvariantCulture, out values[i]) || !double.IsFinite(values[i]))
             {
-                Wrong(attribute, text, expected, parts[i].Contains(',', StringComparison.Ordinal) ? "A number has a comma; only a decimal point is read." : "One of the three is not a finite number.");
+                Wrong(
+                    attribute, text, expected,
+                    parts[i].Contains(',', StringComparison.Ordinal) ? "A number has a comma; only a decimal point is read." : "One of the three is not a finite number.");
                 return null;
             }
 
             if (!(Math.Abs(values[i]) <= most))
             {
                 Wrong(
-                    attribute, text, string.Create(CultureInfo.InvariantCulture, $"numbers from {-most:G5} to {most:G5} {unit}: are the units right?"), "A number is outside its range.");
+                    attribute, text,
+                    string.Create(CultureInfo.InvariantCulture, $"numbers from {-most:G5} to {most:G5} {unit}: are the units right?"),
+                    "A number is outside its range.");
                 return null;
             }
         }
@@ -130,7 +136,9 @@ internal sealed class UrdfJointPart(XmlReader reader, IXmlLineInfo lines, UrdfJo
             return value;
         }
 
-        Wrong(attribute, text, "a finite number", text.Contains(',', StringComparison.Ordinal) ? "The number has a comma; only a decimal point is read." : "This is not a finite number.");
+        Wrong(
+            attribute, text, "a finite number",
+            text.Contains(',', StringComparison.Ordinal) ? "The number has a comma; only a decimal point is read." : "This is not a finite number.");
         return null;
     }
 
@@ -161,5 +169,6 @@ internal sealed class UrdfJointPart(XmlReader reader, IXmlLineInfo lines, UrdfJo
     }
 
     private void Wrong(string attribute, string value, string expected, string message) => problems.Add(
-        lines.LineNumber, lines.LinePosition, $"{joint.Field}, {_element}{(attribute.Length == 0 ? "" : " " + attribute)}", value, expected, message);
+        lines.LineNumber, lines.LinePosition, $"{joint.Field}, {_element}{(attribute.Length == 0 ? "" : " " + attribute)}", value, expected,
+        message);
 }

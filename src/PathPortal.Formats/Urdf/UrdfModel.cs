@@ -10,10 +10,11 @@ namespace PathPortal.Formats.Urdf;
 public sealed class UrdfModel
 {
     private readonly UrdfTree _tree;
+    private readonly ImmutableArray<FormatRemark> _remarks;
 
-    private UrdfModel(UrdfXml xml, UrdfTree tree)
+    private UrdfModel(UrdfXml xml, UrdfTree tree, ImmutableArray<FormatRemark> remarks)
     {
-        (_tree, Name, RootLink, Links) = (tree, xml.RobotName, tree.Root, [.. tree.Order]);
+        (_tree, _remarks, Name, RootLink, Links) = (tree, remarks, xml.RobotName, tree.Root, [.. tree.Order]);
         var parents = xml.Joints.Select(j => j.Parent).ToHashSet(StringComparer.Ordinal);
         TipLinks = [.. Links.Where(l => !parents.Contains(l)).OrderByDescending(l => MovingJoints(l)).ThenBy(l => l, StringComparer.Ordinal)];
     }
@@ -46,7 +47,7 @@ public sealed class UrdfModel
         }
 
         var tree = new UrdfTree(xml, problems);
-        return problems.Any ? ReadResult<UrdfModel>.Refused(problems) : ReadResult<UrdfModel>.Of(new(xml, tree), problems);
+        return problems.Any ? ReadResult<UrdfModel>.Refused(problems) : ReadResult<UrdfModel>.Of(new(xml, tree, problems.Remarks), problems);
     }
 
     public static ReadResult<UrdfModel> Read(string source) => Read(System.Text.Encoding.UTF8.GetBytes(source));
@@ -54,7 +55,10 @@ public sealed class UrdfModel
     /// <summary>What a joint follows, through every joint between; null when it follows none.</summary>
     public UrdfMimic? MimicOf(string joint) => _tree.Resolve(joint);
 
-    /// <summary>The chain from a base link to a tip link as an arm document; the tip becomes the flange.</summary>
+    /// <summary>
+    /// The chain from a base link to a tip link as an arm document; the tip becomes the flange. Remarks on its joints made while the file was read
+    /// come first.
+    /// </summary>
     /// <param name="baseLink">Null: the root.</param>
     /// <param name="tipLink">Null: the first of <see cref="TipLinks"/>.</param>
     /// <param name="freeMimicJoints">
@@ -62,7 +66,7 @@ public sealed class UrdfModel
     /// a remark says so.
     /// </param>
     public ReadResult<ArmDocument> ToArm(string? baseLink = null, string? tipLink = null, bool freeMimicJoints = false) =>
-        new UrdfChain(_tree, Name, freeMimicJoints).ToArm(baseLink ?? RootLink, tipLink ?? TipLinks[0]);
+        new UrdfChain(_tree, Name, _remarks, freeMimicJoints).ToArm(baseLink ?? RootLink, tipLink ?? TipLinks[0]);
 
     private int MovingJoints(string link)
     {

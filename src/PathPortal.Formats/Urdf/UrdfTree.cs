@@ -79,7 +79,9 @@ internal sealed class UrdfTree
 
         if (joint.Child.Length > 0 && !_jointAbove.TryAdd(joint.Child, joint))
         {
-            Wrong(joint, joint.Child, $"one parent per link; joint “{VisibleText.Of(_jointAbove[joint.Child].Name)}” has it already", "The child link has two parents.", problems);
+            Wrong(
+                joint, joint.Child, $"one parent per link; joint “{VisibleText.Of(_jointAbove[joint.Child].Name)}” has it already",
+                "The child link has two parents.", problems);
         }
     }
 
@@ -158,7 +160,9 @@ internal sealed class UrdfTree
         {
             var reached = Order.ToHashSet(StringComparer.Ordinal);
             var lost = xml.Links.First(l => !reached.Contains(l.Name));
-            problems.Add(lost.Line, lost.Column, "link", lost.Name, $"a way from the root link “{VisibleText.Of(roots[0].Name)}”", "The links form a loop.");
+            problems.Add(
+                lost.Line, lost.Column, "link", lost.Name, $"a way from the root link “{VisibleText.Of(roots[0].Name)}”",
+                "The links form a loop.");
         }
 
         return roots[0].Name;

@@ -128,7 +128,9 @@ internal sealed class UrdfXml(ProblemList problems)
         };
         if (known is null)
         {
-            problems.Add(line, column, $"joint {name}, type", type, "fixed, revolute, continuous, prismatic, floating or planar", "The joint has no known type.");
+            problems.Add(
+                line, column, $"joint {name}, type", type, "fixed, revolute, continuous, prismatic, floating or planar",
+                "The joint has no known type.");
         }
 
         _joint = new() { Name = name, Type = known ?? UrdfJointType.Fixed, Line = line, Column = column };

@@ -119,10 +119,12 @@ public sealed class UrdfArmTests
     {
         // Errors of rounded right angles: 1.57 is 0.04562616…°, 1.5708 0.00021045…°, 3.1416 0.00042091…° off (computed with numpy).
         var read = UrdfModel.Read(File($"""<origin rpy="{text} 0 0"/><axis xyz="0 0 1"/><limit lower="-1" upper="1" effort="1" velocity="1"/>"""));
-        var rotation = read.Value!.ToArm().Value!.ToArmModel().Joints[0].PoseInPrevious.Rotation;
+        var arm = read.Value!.ToArm();
+        var rotation = arm.Value!.ToArmModel().Joints[0].PoseInPrevious.Rotation;
 
         Assert.Equal(Math.Cos(angle), rotation.R33, PoseTolerance);
         Assert.Contains($"is {degreesOff}", Assert.Single(read.Remarks).Message, StringComparison.Ordinal);
+        Assert.Equal(read.Remarks[0], arm.Remarks[0]);
     }
 
     [Theory]

@@ -1,10 +1,11 @@
 using PathPortal.Formats.Documents;
 using PathPortal.Formats.Problems;
+using PathPortal.Formats.Tables;
 using PathPortal.Formats.Urdf;
 
 namespace PathPortal.Web.Features.Arms;
 
-/// <summary>An arm model in a file: a document of this portal, or URDF, told apart by their first character.</summary>
+/// <summary>An arm model in a file: a document of this portal, URDF or a DH table, told apart by their first character.</summary>
 internal static class ArmFile
 {
     public const int MaxBytes = 4 * 1024 * 1024;
@@ -18,7 +19,12 @@ internal static class ArmFile
         using var memory = new MemoryStream((int)file.Length);
         await file.CopyToAsync(memory);
         var bytes = memory.ToArray();
-        return IsXml(bytes) ? ReadUrdf(bytes, upload) : ArmDocument.Read(bytes);
+        return FirstOf(bytes) switch
+        {
+            '<' => ReadUrdf(bytes, upload),
+            '{' => ArmDocument.Read(bytes),
+            _ => DhTableCsv.Read(bytes, Path.GetFileNameWithoutExtension(file.FileName)),
+        };
     }
 
     private static ReadResult<ArmDocument> ReadUrdf(byte[] bytes, ArmUpload upload)
@@ -29,17 +35,15 @@ internal static class ArmFile
 
     private static string? Given(string? text) => string.IsNullOrWhiteSpace(text) ? null : text.Trim();
 
-    // A byte order mark and white space may stand before the first "<"; in UTF-16 there are zero bytes between.
-    private static bool IsXml(ReadOnlySpan<byte> bytes)
+    // A byte order mark and white space may stand before it; in UTF-16 there are zero bytes between.
+    private static char FirstOf(ReadOnlySpan<byte> bytes)
     {
         foreach (var b in bytes)
         {
-            if (b == '<')
-                return true;
             if (b is not (0xEF or 0xBB or 0xBF or 0xFE or 0xFF or 0 or (byte)' ' or (byte)'\t' or (byte)'\r' or (byte)'\n'))
-                return false;
+                return (char)b;
         }
-        return false;
+        return '\0';
     }
 
     private static ReadResult<ArmDocument> Refused(string found, string expected, string message) =>
