@@ -166,7 +166,7 @@ internal sealed class JobScene : IAsyncDisposable
     }
 
     // Invented six-joint arm with a spherical wrist.
-    private static string ArmJson()
+    internal static string ArmJson()
     {
         double[] a = [60, 500, 40, 0, 0, 0];
         double[] alpha = [90, 0, 90, -90, 90, 0];
@@ -195,7 +195,7 @@ internal sealed class JobScene : IAsyncDisposable
 
     private static string CriteriaJson() => new CriteriaDocument { AcrossToleranceMm = 1 }.ToJson();
 
-    private static string SetupJson(int cell) => new CellSetupDocument
+    internal static string SetupJson(int cell) => new CellSetupDocument
     {
         Tools = [new() { Name = "nozzle", Pose = new() { ZMm = 120 } }],
         Frames = [new() { Name = "fixture", Pose = new() { XMm = 600 + cell, YMm = -50, ZMm = 200 } }],
