@@ -12,6 +12,9 @@ internal sealed class InputCheck
     // Entries of an orthonormal matrix or unit quaternion come with rounding of a few ulp; documents round to 9 digits at worst.
     private const double OrthonormalTolerance = 1e-6;
 
+    /// <summary>Far beyond any cell (m); a length in millimetres read as metres ends up out there.</summary>
+    public const double FurthestPoint = 1000;
+
     private readonly List<InputProblem> problems = [];
 
     public bool IsFull => problems.Count >= Most;
@@ -31,6 +34,15 @@ internal sealed class InputCheck
         if (!double.IsFinite(value))
         {
             Add(place, quantity, value, unit, "must be a finite number");
+        }
+    }
+
+    /// <summary>At most a size either way of zero.</summary>
+    public void Within(string place, string quantity, double value, double size, string unit)
+    {
+        if (!(Math.Abs(value) <= size))
+        {
+            Add(place, quantity, value, unit, $"must be between {InputText.Of(-size)} and {InputText.Of(size)}");
         }
     }
 
@@ -88,6 +100,11 @@ internal sealed class InputCheck
     public void Pose(string place, string quantity, RigidTransform pose)
     {
         Point(place, quantity + ", translation", pose.Translation);
+        if (pose.Translation.Norm > FurthestPoint)
+        {
+            Add(place, quantity + ", distance", pose.Translation.Norm, "m", $"must be at most {FurthestPoint} m");
+        }
+
         var (x, y, z) = (pose.Rotation.AxisX, pose.Rotation.AxisY, pose.Rotation.AxisZ);
         var worst = Math.Max((x.Cross(y) - z).Norm, Math.Max(Math.Abs(x.Norm - 1), Math.Max(Math.Abs(y.Norm - 1), Math.Abs(x.Dot(y)))));
         if (!(worst <= OrthonormalTolerance))

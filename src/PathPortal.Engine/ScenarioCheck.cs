@@ -35,7 +35,7 @@ public static class ScenarioCheck
 
         if (scenario.FreeTurn is { } turn)
         {
-            check.Finite("start", "free turn", turn, "rad");
+            check.Within("start", "free turn", turn, 2 * Math.PI, "rad");
         }
 
         Clearances(scenario, check);

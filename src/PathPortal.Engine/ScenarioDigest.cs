@@ -15,7 +15,8 @@ namespace PathPortal.Engine;
 /// Byte order, all little-endian: a tag and the numerics version; the arm (characteristic length, flange, joints); the cell's poses; the controller;
 /// the criteria; start and free turn; the waypoints. Numbers are IEEE bits, so 0 and −0 differ; counts, enumerations and flags are 32-bit integers;
 /// an optional value is a flag and, when present, the value; a list is its count and its items. Left out, because results hold none of them: names of
-/// arm and joints, sources of limits, labels and source lines of waypoints. Near thresholds count as they act, defaults filled in.
+/// arm and joints, sources of limits, labels and source lines of waypoints, units the path's source was written in. Near thresholds count as they act,
+/// defaults filled in.
 /// </remarks>
 public static class ScenarioDigest
 {

@@ -24,7 +24,7 @@ public sealed class ScenarioCheckTests
         { "arm, number of joints: 0, must be 1 to 8", Good with { Arm = Good.Arm with { Joints = [] } } },
         { "arm, characteristic length: -1 m, must be above zero", Good with { Arm = Good.Arm with { CharacteristicLength = -1 } } },
         { "joint 3, sign: 0, must be 1 or -1", WithJoint(2, j => j with { Sign = 0 }) },
-        { "joint 2, zero: Infinity rad, must be a finite number", WithJoint(1, j => j with { Zero = double.PositiveInfinity }) },
+        { "joint 2, zero: Infinity rad, must be between -1000 and 1000", WithJoint(1, j => j with { Zero = double.PositiveInfinity }) },
         { "joint 1, high position limit: -3 rad, must be above the low limit, -2 rad", WithLimits(0, l => l with { High = new(-3, "") }) },
         { "joint 4, speed limit: 0 rad/s, must be above zero", WithLimits(3, l => l with { Speed = new(0, "") }) },
         { "joint 5, position limit: -2 rad, a continuous joint has no position limit", WithLimits(4, l => l with { Continuous = true }) },
@@ -39,6 +39,13 @@ public sealed class ScenarioCheckTests
         { "waypoint 4, speed: 0 m/s, must be above zero", WithWaypoint(3, w => w with { Speed = 0 }) },
         { "waypoint 2, joint speed share: 0, must be above 0 and at most 1", WithWaypoint(1, w => w with { JointSpeedShare = 0 }) },
         { "waypoint 3, dwell: 1 s, must be zero where the corner is rounded: the tool does not stop there", WithWaypoint(2, w => w with { Dwell = 1 }) },
+        { "controller, period: 2 s, must be at most 1 s", Good with { Controller = Good.Controller with { Period = 2 } } },
+        { "joint 1, high position limit: 1E+300 rad, must be between -1000 and 1000", WithLimits(0, l => l with { High = new(1e300, "") }) },
+        { "start, free turn: 90 rad, must be between -6.28319 and 6.28319", Good with { FreeTurn = 90 } },
+        {
+            "cell, base pose, distance: 1500 m, must be at most 1000 m",
+            Good with { Cell = Good.Cell with { BaseInCell = RigidTransform.FromTranslation(1500, 0, 0) } }
+        },
         { "cell, tool, rotation: 1, must be a rotation; this is how far the matrix is from one", Good with { Cell = Good.Cell with { ToolInFlange = default } } },
     };
 

@@ -18,6 +18,7 @@ public sealed class ScenarioDigestTests
         $"{nameof(Limit)}.{nameof(Limit.Source)}",
         $"{nameof(Waypoint)}.{nameof(Waypoint.Label)}",
         $"{nameof(Waypoint)}.{nameof(Waypoint.SourceLine)}",
+        $"{nameof(ToolPath)}.{nameof(ToolPath.PostureKinds)}",
     ];
 
     [Fact]
@@ -110,6 +111,9 @@ public sealed class ScenarioDigestTests
                     yield return ($"{name}[{i}]", numbers.SetItem(i, numbers[i] + 0.125));
                 }
 
+                yield break;
+            case ImmutableArray<JointKind> kinds:
+                yield return (name, kinds.Add(JointKind.Prismatic));
                 yield break;
             case ImmutableArray<Joint> joints:
                 yield return (name + " length", joints.Add(joints[0]));

@@ -5,6 +5,9 @@ namespace PathPortal.Engine.Arms;
 /// <summary>Checks an arm model for what no simulation can run on. Problems name joint, value, unit and expectation.</summary>
 public static class ArmCheck
 {
+    // rad or m: no joint goes there, and degrees or millimetres taken for SI often do.
+    private const double LargestValue = 1000;
+
     public static ImmutableArray<InputProblem> Find(ArmModel arm)
     {
         ArgumentNullException.ThrowIfNull(arm);
@@ -39,7 +42,7 @@ public static class ArmCheck
         var unit = joint.Kind == JointKind.Revolute ? "rad" : "m";
         check.Known(place, "kind", joint.Kind);
         check.Pose(place, "pose in the joint before", joint.PoseInPrevious);
-        check.Finite(place, "zero", joint.Zero, unit);
+        check.Within(place, "zero", joint.Zero, LargestValue, unit);
         if (joint.Sign is not (1 or -1))
         {
             check.Add(place, "sign", joint.Sign, "1", "must be 1 or -1");
@@ -58,12 +61,12 @@ public static class ArmCheck
 
         if (limits.Low is { } low)
         {
-            check.Finite(place, "low position limit", low.Value, unit);
+            check.Within(place, "low position limit", low.Value, LargestValue, unit);
         }
 
         if (limits.High is { } high)
         {
-            check.Finite(place, "high position limit", high.Value, unit);
+            check.Within(place, "high position limit", high.Value, LargestValue, unit);
             if (limits.Low is { } lower && high.Value <= lower.Value)
             {
                 check.Add(place, "high position limit", high.Value, unit, $"must be above the low limit, {InputText.Of(lower.Value)} {unit}");

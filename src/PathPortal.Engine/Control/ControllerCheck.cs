@@ -4,11 +4,17 @@ namespace PathPortal.Engine.Control;
 internal static class ControllerCheck
 {
     private const int MostDelay = 64;
+    private const double LongestPeriod = 1; // s
 
     public static void Check(ControllerSettings controller, InputCheck check)
     {
         const string place = "controller";
         check.Above(place, "period", controller.Period, 0, "s");
+        if (controller.Period > LongestPeriod)
+        {
+            check.Add(place, "period", controller.Period, "s", $"must be at most {LongestPeriod} s");
+        }
+
         check.NotNegative(place, "position gain", controller.PositionGain, "1/s");
         check.NotNegative(place, "orientation gain", controller.OrientationGain, "1/s");
         check.NotNegative(place, "mid-range gain", controller.MidRangeGain, "1/s");

@@ -5,9 +5,6 @@ internal static class PathCheck
 {
     public const int MostWaypoints = 200_000;
 
-    // Far beyond any cell; a coordinate in millimetres read as metres ends up here.
-    private const double FurthestPoint = 1000; // m
-
     /// <param name="joints">Number of joints of the arm that is to follow the path.</param>
     public static void Check(ToolPath path, int joints, InputCheck check)
     {
@@ -44,9 +41,9 @@ internal static class PathCheck
     private static void Check(string place, Waypoint waypoint, bool isFirst, int joints, InputCheck check)
     {
         check.Point(place, "position", waypoint.Position);
-        if (waypoint.Position.IsFinite && !(waypoint.Position.Norm <= FurthestPoint))
+        if (waypoint.Position.IsFinite && !(waypoint.Position.Norm <= InputCheck.FurthestPoint))
         {
-            check.Add(place, "distance from the work frame", waypoint.Position.Norm, "m", $"must be at most {FurthestPoint} m");
+            check.Add(place, "distance from the work frame", waypoint.Position.Norm, "m", $"must be at most {InputCheck.FurthestPoint} m");
         }
 
         check.Orientation(place, waypoint.Orientation);

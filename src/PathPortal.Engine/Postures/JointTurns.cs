@@ -29,12 +29,14 @@ internal static class JointTurns
             return [principal];
         }
 
+        // Turns next to the one nearest to zero; a wide range holds far more than anybody wants.
         var from = low ?? high!.Value - Full;
         var to = high ?? low!.Value + Full;
+        var nearest = Math.Min(Math.Max(0, Math.Ceiling((from - principal) / Full)), Math.Floor((to - principal) / Full));
         var values = new List<double>();
-        for (var turn = Math.Ceiling((from - principal) / Full) - 1; turn <= Math.Floor((to - principal) / Full) + 1; turn++)
+        for (var step = -Most; step <= Most; step++)
         {
-            var candidate = principal + turn * Full;
+            var candidate = principal + (nearest + step) * Full;
             if (candidate >= from && candidate <= to)
             {
                 values.Add(candidate);

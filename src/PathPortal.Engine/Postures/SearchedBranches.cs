@@ -61,6 +61,10 @@ internal sealed class SearchedBranches(ArmModel arm, RigidTransform toolInFlange
         var half = joint.Kind == JointKind.Revolute ? Math.PI : RangeWithoutLimits * arm.CharacteristicLength;
         var low = joint.Limits.Low?.Value ?? (joint.Limits.High?.Value ?? half) - 2 * half;
         var high = joint.Limits.High?.Value ?? low + 2 * half;
-        return low + share * (high - low);
+
+        // A turn more reaches nothing new.
+        return joint.Kind == JointKind.Revolute && high - low > JointTurns.Full
+            ? -half + share * JointTurns.Full
+            : low + share * (high - low);
     }
 }

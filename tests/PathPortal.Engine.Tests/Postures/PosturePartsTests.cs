@@ -63,6 +63,20 @@ public sealed class PosturePartsTests
     public void Inside_LimitsInRadians_GivesEveryTurn(double low, double high, double value, double[] expected) =>
         Approximately.Equal(expected, JointTurns.Inside(Joint(TestArms.Limits(low, high)), value), 1e-14, "values");
 
+    [Theory]
+    [InlineData(-1e12, 1e12, 1.0, 1.0)]
+    [InlineData(1e6, 1e6 + 100, 1.0, 1e6)]
+    [InlineData(-1e6 - 100, -1e6, 1.0, -1e6)]
+    public void Inside_HugeRange_GivesFiveTurnsNearestToZero(double low, double high, double value, double nearest)
+    {
+        var values = JointTurns.Inside(Joint(TestArms.Limits(low, high)), value);
+
+        Assert.Equal(5, values.Count);
+        Assert.All(values, v => Assert.InRange(v, low, high));
+        Assert.All(values, v => Approximately.Equal(0, Math.IEEERemainder(v - value, 2 * Math.PI), 1e-9, "turns; 1e6 rad is good to 1e-10"));
+        Assert.InRange(Math.Abs(values[0] - nearest), 0, 2 * Math.PI);
+    }
+
     [Fact]
     public void Inside_NoLimitsOrContinuous_IsThePrincipalValue()
     {
