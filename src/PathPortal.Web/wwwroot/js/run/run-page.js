@@ -126,6 +126,7 @@ class RunPage {
 
   #fill(at) {
     this.filled = true;
+    this.root.querySelector('[data-part="trouble"]').hidden = true;
     const { joint } = this.moment.fill(at);
     this.path?.pose(this.cursor, at, joint);
     this.root.dataset.filled = `${this.cursor}`;
