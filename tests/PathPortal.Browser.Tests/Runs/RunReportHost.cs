@@ -6,6 +6,7 @@ using Microsoft.AspNetCore.Http;
 using Microsoft.AspNetCore.ResponseCompression;
 using Microsoft.Extensions.DependencyInjection;
 using Microsoft.Extensions.Logging;
+using PathPortal.Engine.Verdicts;
 using PathPortal.TestSupport.Runs;
 using PathPortal.Web.Features.Runs;
 using PathPortal.Web.Features.Runs.Samples;
@@ -75,7 +76,7 @@ public sealed class RunReportHost : IAsyncDisposable
         return new()
         {
             Id = new("0198c0de-0000-7000-8000-000000000001"),
-            Sentence = "Fails 36.72 s in, at 61.2 % of the path on the way to waypoint 9: J5 is asked for 341 °/s and is allowed 261 °/s (131 %).",
+            Sentence = VerdictSentence.Of(run.Summary.Verdict, run.Summary.Outcomes),
             Summary = run.Summary,
             Bins = run.Bins,
             Arm = run.Scenario.Arm,
