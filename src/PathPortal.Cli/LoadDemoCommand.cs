@@ -1,6 +1,9 @@
 using System.CommandLine;
+using Microsoft.Extensions.DependencyInjection;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Demo;
+using PathPortal.Portal.Handling;
+using PathPortal.Portal.Jobs;
 
 namespace PathPortal.Cli;
 
@@ -21,7 +24,16 @@ internal static class LoadDemoCommand
         command.SetAction((parsed, cancellation) => Terminal.RunAsync(async () =>
         {
             await using var database = await OwnerDatabase.OpenAsync(cancellation);
-            var loader = new DemoLoader(database.Db, PortalData.CreateHasher());
+            await using var services = new ServiceCollection()
+                .AddSingleton(TimeProvider.System)
+                .AddLogging()
+                .AddPortalData(Settings.Owner)
+                .AddRunQueue()
+                .AddPortalHandlers()
+                .AddDemo()
+                .BuildServiceProvider();
+            await using var scope = services.CreateAsyncScope();
+            var loader = scope.ServiceProvider.GetRequiredService<DemoLoader>();
             foreach (var line in await loader.LoadAsync(parsed.GetRequiredValue(file).FullName, cancellation))
                 Console.WriteLine(line);
             return Terminal.Done;

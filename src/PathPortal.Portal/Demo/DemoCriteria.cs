@@ -5,8 +5,14 @@ namespace PathPortal.Portal.Demo;
 /// <summary>The criteria sheets of the demo, one per kind of process. Tolerances are invented.</summary>
 public static class DemoCriteria
 {
+    /// <summary>Every sheet with its name.</summary>
+    public static IReadOnlyList<(string Name, CriteriaDocument Sheet)> All { get; } =
+    [
+        ("Sealing", Sealing()), ("Welding", Welding()), ("Edges", Edges()), ("Drilling", Drilling()), ("Polishing", Polishing()),
+    ];
+
     /// <summary>A bead laid beside an edge: stand-off and speed decide how thick it is.</summary>
-    public static CriteriaDocument Sealing() => new()
+    private static CriteriaDocument Sealing() => new()
     {
         Note = "Invented for the demo.",
         AcrossToleranceMm = 0.8,
@@ -20,7 +26,7 @@ public static class DemoCriteria
     };
 
     /// <summary>A seam: the torch may lean, the arc may not leave the joint.</summary>
-    public static CriteriaDocument Welding() => new()
+    private static CriteriaDocument Welding() => new()
     {
         Note = "Invented for the demo.",
         AcrossToleranceMm = 0.5,
@@ -34,7 +40,7 @@ public static class DemoCriteria
     };
 
     /// <summary>A spindle along an edge.</summary>
-    public static CriteriaDocument Edges() => new()
+    private static CriteriaDocument Edges() => new()
     {
         Note = "Invented for the demo.",
         AcrossToleranceMm = 0.4,
@@ -48,7 +54,7 @@ public static class DemoCriteria
     };
 
     /// <summary>Holes: the turn about the drill is free, the axis is not.</summary>
-    public static CriteriaDocument Drilling() => new()
+    private static CriteriaDocument Drilling() => new()
     {
         Note = "Invented for the demo.",
         AcrossToleranceMm = 0.2,
@@ -59,7 +65,7 @@ public static class DemoCriteria
     };
 
     /// <summary>A ball-shaped tool: only the contact point counts.</summary>
-    public static CriteriaDocument Polishing() => new()
+    private static CriteriaDocument Polishing() => new()
     {
         Note = "Invented for the demo.",
         AcrossToleranceMm = 1.5,

@@ -11,7 +11,7 @@ using PathPortal.Portal.Handling.People;
 namespace PathPortal.Portal.Demo;
 
 /// <summary>Brings the invented company into a database. What is there already stays; a second load changes nothing.</summary>
-public sealed class DemoLoader(PortalDb db, IPasswordHasher<Account> hasher)
+public sealed class DemoLoader(PortalDb db, IPasswordHasher<Account> hasher, DemoDefinitions definitions, DemoUploads uploads)
 {
     private static readonly Actor Actor = Actor.Process("load-demo");
 
@@ -29,13 +29,15 @@ public sealed class DemoLoader(PortalDb db, IPasswordHasher<Account> hasher)
         var made = await LoadCompanyAsync(passwords, [.. unknown.Select(p => p.Email)], cancellation);
         if (!made.Succeeded)
             throw new InvalidOperationException(made.Refusal.Message);
-        var content = await DemoContent.LoadAsync(db, cancellation);
+        var places = await db.ReadAsync(Actor, session => DemoPlaces.ReadAsync(session, cancellation), cancellation);
+        var cells = await definitions.LoadAsync(places, cancellation);
+        var revisions = await uploads.LoadAsync(places, cancellation);
         return
         [
             made.Value == 0
                 ? "The demo accounts were there already."
                 : string.Create(CultureInfo.InvariantCulture, $"Demo accounts made: {made.Value}. Their passwords are in {passwordsFile}."),
-            .. content,
+            string.Create(CultureInfo.InvariantCulture, $"Demo cells made: {cells}; revisions uploaded: {revisions}."),
         ];
     }
 
