@@ -20,9 +20,9 @@ public static class DemoArms
             Row("J1 base", 50, 90, 400, Turn(-170, 170, 200, 900)),
             Row("J2 shoulder", 420, 0, 0, Turn(-30, 160, 180, 800)),
             Row("J3 elbow", 30, 90, 0, Turn(-110, 130, 200, 900)),
-            Row("J4 forearm", 0, -90, 380, Turn(-190, 190, 360, 2000)),
-            Row("J5 wrist", 0, 90, 0, Turn(-125, 125, 360, 2000)),
-            Row("J6 flange", 0, 0, 90, Turn(-360, 360, 450, 2800)),
+            Row("J4 forearm", 0, -90, 380, Turn(-190, 190, 100, 8000)),
+            Row("J5 wrist", 0, 90, 0, Turn(-125, 125, 360, 8000)),
+            Row("J6 flange", 0, 0, 90, Turn(-360, 360, 450, 8000)),
         ],
     };
 

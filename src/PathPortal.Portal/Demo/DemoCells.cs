@@ -55,7 +55,7 @@ public static class DemoCells
         PositionGainPerS = 20,
         OrientationGainPerS = 20,
         TimeLaw = TimeLaw.Trapezoidal,
-        ToolAccelerationMmS2 = 1500,
+        ToolAccelerationMmS2 = 800,
         Damping = DampingKind.Variable,
         DampingLambda = 0.03,
         DampingEpsilon = 0.03,
@@ -64,7 +64,7 @@ public static class DemoCells
     /// <summary>An older controller: the loop closes on commanded joints and never sees the servo's long lag.</summary>
     public static ControllerDocument Older() => Current() with
     {
-        ServoTimeConstantMs = 45,
+        ServoTimeConstantMs = 52,
         Feedback = FeedbackSource.Commanded,
     };
 

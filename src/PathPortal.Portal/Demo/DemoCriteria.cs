@@ -11,7 +11,7 @@ public static class DemoCriteria
         ("Sealing", Sealing()), ("Welding", Welding()), ("Edges", Edges()), ("Drilling", Drilling()), ("Polishing", Polishing()),
     ];
 
-    /// <summary>A bead laid beside an edge: stand-off and speed decide how thick it is.</summary>
+    /// <summary>A bead laid beside an edge: stand-off decides how thick it is.</summary>
     private static CriteriaDocument Sealing() => new()
     {
         Note = "Invented for the demo.",
@@ -22,7 +22,6 @@ public static class DemoCriteria
         AxisToleranceDeg = 3,
         AxisAllowanceDeg = 0.2,
         RequiredSigmaMin = 0.04,
-        ToolSpeedTolerancePercent = 15,
     };
 
     /// <summary>A seam: the torch may lean, the arc may not leave the joint.</summary>
@@ -39,7 +38,7 @@ public static class DemoCriteria
         ToolSpeedTolerancePercent = 20,
     };
 
-    /// <summary>A spindle along an edge.</summary>
+    /// <summary>A spindle along an edge; its hose needs room at the wrist.</summary>
     private static CriteriaDocument Edges() => new()
     {
         Note = "Invented for the demo.",
@@ -49,7 +48,7 @@ public static class DemoCriteria
         StandOffAllowanceMm = 0.1,
         AxisToleranceDeg = 5,
         AxisAllowanceDeg = 0.2,
-        RevoluteClearanceDeg = 5,
+        RevoluteClearanceDeg = 15,
         RequiredSigmaMin = 0.03,
     };
 

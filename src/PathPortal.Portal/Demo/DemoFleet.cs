@@ -21,13 +21,13 @@ public static class DemoFleet
         new(DemoCompany.Brevola, "Seal 3", Bench, "Mirror image of Seal 1.", Cell(
             DemoCells.Pedestal(500), [DemoCells.Nozzle], [DemoCells.Frame("fixture A", 480, -150, 640, 6)], DemoCells.Current())),
         new(DemoCompany.Brevola, "Weld 1", Bench, "Two brackets a cycle, torch straight on the flange.", Cell(
-            DemoCells.Pedestal(500), [DemoCells.Torch], [DemoCells.Frame("bracket", 420, -30, 700)], DemoCells.Current())),
+            DemoCells.Pedestal(500), [DemoCells.Torch], [DemoCells.Frame("bracket", 420, -30, 700)], DemoCells.Current() with { ToolAccelerationMmS2 = 100 })),
         new(DemoCompany.Brevola, "Finish 1", Track, "Large panels; the arm travels beside the table.", Cell(
             DemoCells.TrackEnd(-1200, -1000, 400), [DemoCells.Ball, DemoCells.Drill], [DemoCells.Frame("panel", 0, 100, 800)],
-            DemoCells.Current() with { MidRangeGainPerS = 0.2, ToolAccelerationMmS2 = 1000 })),
+            DemoCells.Current() with { ToolAccelerationMmS2 = 1000 })),
         new(DemoCompany.Osmeda, "Seal 4", Bench, "The fixture stands close to the arm.", Cell(
-            DemoCells.Pedestal(500), [DemoCells.Nozzle], [DemoCells.Frame("fixture A", 330, -170, 560)],
-            DemoCells.Current() with { LimitReaction = LimitReaction.KeepTime })),
+            DemoCells.Pedestal(500), [DemoCells.Nozzle], [DemoCells.Frame("fixture A", 300, -170, 530)],
+            DemoCells.Current() with { LimitReaction = LimitReaction.SlowPath })),
         new(DemoCompany.Osmeda, "Seal 5", Floor, "A larger arm than the job needs.", Cell(
             DemoCells.Pedestal(200), [DemoCells.Nozzle], [DemoCells.Frame("fixture A", 950, -170, 700)], DemoCells.Current())),
         new(DemoCompany.Osmeda, "Drill 1", Floor, "Drilling unit at 30° to the flange.", Cell(

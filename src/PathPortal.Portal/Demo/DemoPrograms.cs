@@ -21,10 +21,10 @@ public static class DemoPrograms
                 new("door-frame-seal-2.csv", "Faster, and the nozzle leans over the hinge boss to keep the bead clear of it."),
             ]),
         new(DemoCompany.Tarnhus, Asta, "Pump housing", "Gasket groove trace", "sealing", "Sealing",
-            [On(DemoCompany.Tarnhus, "Seal 1", "torch", "fixture A"), On(DemoCompany.Tarnhus, "Seal 2", "torch", "fixture A")],
+            [On(DemoCompany.Tarnhus, "Seal 1", "torch", "fixture A", 0), On(DemoCompany.Tarnhus, "Seal 2", "torch", "fixture A", 0)],
             [
                 new("groove-trace-1.csv", "Slow enough for every controller."),
-                new("groove-trace-2.csv", "Cycle time: nearly three times as fast through the bends."),
+                new("groove-trace-2.csv", "Cycle time: more than twice as fast through the bends."),
             ]),
         new(DemoCompany.Tarnhus, Asta, "Pump housing", "Housing edge deburring", "deburring", "Edges",
             [On(DemoCompany.Tarnhus, "Trim 1", "spindle", "table")],
@@ -35,11 +35,11 @@ public static class DemoPrograms
         new(DemoCompany.Brevola, Asta, "Seat bracket", "Bracket weld seam", "welding", "Welding",
             [On(DemoCompany.Brevola, "Weld 1", "torch", "bracket")],
             [
-                new("bracket-weld-1.csv", "As drawn."),
-                new("bracket-weld-2.csv", "Bracket moved sideways, away from the wrist singularity."),
+                new("bracket-weld-1.csv", "As drawn: the torch leans as the drawing says, and the wrist comes straight."),
+                new("bracket-weld-2.csv", "The torch leans less, which keeps the wrist bent."),
             ]),
         new(DemoCompany.Osmeda, Boro, "Roof panel", "Panel drilling", "drilling", "Drilling",
-            [On(DemoCompany.Osmeda, "Drill 1", "drill", "jig"), On(DemoCompany.Brevola, "Finish 1", "drill", "panel")],
+            [On(DemoCompany.Osmeda, "Drill 1", "drill", "jig", 0), On(DemoCompany.Brevola, "Finish 1", "drill", "panel", 0)],
             [
                 new("panel-drilling-1.csv", "Eight holes."),
                 new("panel-drilling-2.csv", "Fifteen holes after the change of the hinge."),
@@ -62,5 +62,6 @@ public static class DemoPrograms
         return memory.ToArray();
     }
 
-    private static DemoProgram.Run On(string plant, string cell, string tool, string frame) => new(plant, cell, new StartTerms(tool, frame, null, null));
+    private static DemoProgram.Run On(string plant, string cell, string tool, string frame, double? freeTurn = null) =>
+        new(plant, cell, new StartTerms(tool, frame, null, freeTurn));
 }
