@@ -172,7 +172,7 @@ public sealed class RunReportTests(Chromium chromium) : IAsyncLifetime
         return int.Parse((await _page.Locator(".run").GetAttributeAsync("data-cursor"))!, CultureInfo.InvariantCulture);
     }
 
-    private Task FilledAsync(int sample) => _page.WaitForFunctionAsync("k => document.querySelector('.run').dataset.filled === String(k)", sample);
+    private async Task FilledAsync(int sample) => await _page.WaitForFunctionAsync("k => document.querySelector('.run').dataset.filled === String(k)", sample);
 
     private Task<string> PictureAsync() => _page.EvaluateAsync<string>("() => new Promise(done => requestAnimationFrame(() => done(document.querySelector('.arm-scene canvas').toDataURL())))");
 
