@@ -48,13 +48,13 @@ internal sealed class PostureRuns(Scenario scenario, PathPlan plan, PostureFinde
     /// <summary>One group at a given width.</summary>
     internal LaneOutcome[] Run(
         int width, IReadOnlyList<ImmutableArray<double>> starts, LoopTrace trace, IProgress<double>? progress, CancellationToken cancellation) => width switch
-    {
-        1 => new LoopSimulation<ScalarLane>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
-        2 => new LoopSimulation<Lane128>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
-        4 => new LoopSimulation<Lane256>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
-        8 => new LoopSimulation<Lane512>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
-        _ => throw new ArgumentOutOfRangeException(nameof(width), width, "Lanes come by 1, 2, 4 and 8."),
-    };
+        {
+            1 => new LoopSimulation<ScalarLane>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
+            2 => new LoopSimulation<Lane128>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
+            4 => new LoopSimulation<Lane256>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
+            8 => new LoopSimulation<Lane512>(scenario, setup, plan, finder, starts).Run(trace, progress, cancellation),
+            _ => throw new ArgumentOutOfRangeException(nameof(width), width, "Lanes come by 1, 2, 4 and 8."),
+        };
 
     private static PartProgress? Part(IProgress<double>? progress, int first, int count, int all) =>
         progress is null ? null : new(progress, (double)first / all, (double)count / all);

@@ -62,14 +62,14 @@ internal static class LoopScenarios
 
     public static Scenario Scenario(
         ImmutableArray<double> start, RigidTransform tool, ControllerSettings controller, ImmutableArray<Waypoint> waypoints) => new()
-    {
-        Arm = TestArms.SixJoints(),
-        Cell = new(RigidTransform.Identity, tool, RigidTransform.Identity),
-        Controller = controller,
-        Path = new(waypoints),
-        Criteria = Criteria,
-        Start = start,
-    };
+        {
+            Arm = TestArms.SixJoints(),
+            Cell = new(RigidTransform.Identity, tool, RigidTransform.Identity),
+            Controller = controller,
+            Path = new(waypoints),
+            Criteria = Criteria,
+            Start = start,
+        };
 
     public static Waypoint Point(Vector3D position, UnitQuaternion orientation) =>
         new() { Position = position, Orientation = orientation, Motion = MotionKind.Straight, Speed = 0.03 };
