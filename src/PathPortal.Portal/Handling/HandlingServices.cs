@@ -5,6 +5,7 @@ using PathPortal.Portal.Handling.People;
 using PathPortal.Portal.Handling.Programs;
 using PathPortal.Portal.Handling.Reviews;
 using PathPortal.Portal.Handling.Runs;
+using PathPortal.Portal.Jobs;
 
 namespace PathPortal.Portal.Handling;
 
@@ -13,6 +14,7 @@ public static class HandlingServices
 {
     /// <summary>Needs AddPortalData and AddRunQueue.</summary>
     public static IServiceCollection AddPortalHandlers(this IServiceCollection services) => services
+        .AddRunSamples()
         .AddSingleton<AddCell>()
         .AddSingleton<SaveArmModel>()
         .AddSingleton<SaveCellSetup>()

@@ -1,4 +1,5 @@
 using Microsoft.Extensions.DependencyInjection;
+using Microsoft.Extensions.DependencyInjection.Extensions;
 using PathPortal.Portal.Simulation;
 using Quartz;
 
@@ -14,9 +15,14 @@ public static class JobServices
         return services.AddSingleton<RunQueue>();
     }
 
-    /// <summary>For a process that shows runs or decides on them. Needs AddPortalData.</summary>
-    public static IServiceCollection AddRunSamples(this IServiceCollection services, RunSampleCacheOptions? options = null) =>
-        services.AddSingleton(options ?? new()).AddSingleton<RunSampleCache>().AddSingleton<DecisionSamples>();
+    /// <summary>For a process that shows runs or decides on them. Needs AddPortalData; register options of its own before.</summary>
+    public static IServiceCollection AddRunSamples(this IServiceCollection services)
+    {
+        services.TryAddSingleton(new RunSampleCacheOptions());
+        services.TryAddSingleton<RunSampleCache>();
+        services.TryAddSingleton<DecisionSamples>();
+        return services;
+    }
 
     /// <summary>For a worker process. Needs AddPortalData.</summary>
     public static IServiceCollection AddRunWorker(this IServiceCollection services, JobWorkerOptions options)

@@ -6,6 +6,7 @@ using PathPortal.Portal.Domain;
 using PathPortal.Portal.Domain.History;
 using PathPortal.Portal.Domain.People;
 using PathPortal.Portal.Domain.Reviews;
+using PathPortal.Portal.Simulation;
 
 namespace PathPortal.Portal.Handling.Reviews;
 
@@ -13,7 +14,7 @@ namespace PathPortal.Portal.Handling.Reviews;
 /// Approves or rejects a revision on a cell: by somebody else than uploader and submitter, signed in again just now, on exactly the digests
 /// that were shown.
 /// </summary>
-public sealed class DecideReview(PortalDb db)
+public sealed class DecideReview(PortalDb db, DecisionSamples samples)
 {
     private const string What = "review";
 
@@ -26,6 +27,9 @@ public sealed class DecideReview(PortalDb db)
         var noted = Names.Note(decision.Reason);
         if (!noted.Succeeded)
             return noted.Refusal;
+        // Computed before the transaction, which must be short; kept only when the decision comes to rest on that very run.
+        var run = await db.ReadAsync(actor, session => RunOfAsync(session, decision.ReviewId, cancellation), cancellation);
+        Outcome<byte[]>? packed = run is { } runId ? await samples.PackAsync(runId, cancellation) : null;
         return await db.ActAsync<ReviewState>(actor, async session =>
         {
             var data = session.Db;
@@ -51,17 +55,37 @@ public sealed class DecideReview(PortalDb db)
             if (evidence is not { RunRequestId: { } request, Digests: { } digests })
                 return new Refusal(RefusalKind.WrongState, evidence.NotUsable ?? "There is no run to decide on.");
 
+            if (evidence.RunId != run)
+                return new Refusal(RefusalKind.Stale, "The run changed at this moment. Look at the review again before you decide.");
+            if (decision.Kind == DecisionKind.Approve && packed is { Succeeded: false, Refusal: var unkept })
+                return unkept;
+
             var decided = review.Decide(
                 decision.Kind, access.AccountId, revision.UploadedBy, digests, request, DecisionMeaning.Of(decision.Kind), noted.Value, session.Now);
             if (!decided.Succeeded)
                 return decided.Refusal;
+            if (packed is { Succeeded: true, Value: { Length: > 0 } bytes })
+                decided.Value.KeepSamples(bytes);
             session.Tell(HistoryDraft.Of(review.PlantId, What, review.Id, decision.Kind == DecisionKind.Approve ? "approved" : "rejected",
                 ("program", revision.Program), ("revision", revision.Number.ToString(CultureInfo.InvariantCulture)),
                 ("state", ReviewMoves.InWords(review.State)), ("revision sha256", digests.RevisionSha256), ("setup sha256", digests.SetupSha256),
                 ("criteria sha256", digests.CriteriaSha256), ("run digest", digests.RunDigest), ("controller file sha256", digests.ControllerFileSha256),
-                ("signed by", proof.Method), ("meaning", decided.Value.Meaning), ("reason", noted.Value)));
+                ("samples sha256", decided.Value.SamplesSha256), ("signed by", proof.Method), ("meaning", decided.Value.Meaning), ("reason", noted.Value)));
             return review.State;
         }, cancellation);
+    }
+
+    // Null for those who may not decide: nothing is computed for them, and the decision itself tells them why.
+    private static async Task<Guid?> RunOfAsync(PortalSession session, Guid reviewId, CancellationToken cancellation)
+    {
+        var access = await session.AccessAsync(cancellation);
+        var review = await session.Db.Reviews.SingleOrDefaultAsync(r => r.Id == reviewId, cancellation);
+        if (review is null || access.Refuse(review.PlantId, Right.Read, What) is not null)
+            return null;
+        var plant = await session.Db.Plants.SingleAsync(p => p.Id == review.PlantId, cancellation);
+        return plant.MayApprove(access)
+            ? (await EvidenceReader.ReadAsync(session.Db, review.RevisionId, review.AssignmentId, cancellation)).RunId
+            : null;
     }
 
     private static Refusal? RefuseEvidence(CurrentEvidence evidence, ReviewDecision decision, Review review)
