@@ -8,6 +8,9 @@ builder.Logging.AddJsonConsole(options =>
     options.UseUtcTimestamp = true;
     options.TimestampFormat = "yyyy-MM-ddTHH:mm:ss.fffZ";
 });
+// Every statement and every step of the job engine would drown what the worker itself has to say.
+builder.Logging.AddFilter("Microsoft.EntityFrameworkCore", LogLevel.Warning);
+builder.Logging.AddFilter("Quartz", LogLevel.Warning);
 
 var database = builder.Configuration.GetConnectionString("Portal");
 if (string.IsNullOrEmpty(database))

@@ -48,7 +48,7 @@ internal sealed class JobScene : IAsyncDisposable
         _setups = [.. cells.Select((c, i) => c.AddSetup(_arm.Id, StoredDocument.Of(SetupJson(i)), "", _author.Id, at))];
         PathProgram program = new(_plant.Id, part.Id, "Invented bead", "sealing", sheet.Id, _author.Id, at);
         _program = program.Id;
-        double[] start = [0, -1, 1, 0, 1, 0];
+        double[]? start = null;
         _assignments = [.. cells.Select(c => new Assignment(program.Id, c.Id, new("nozzle", "fixture", start, null), _author.Id, at))];
         Rows = [_author, _plant, part, arm, _arm, sheet, _criteria, .. cells, .. _setups, program, .. _assignments];
     }
