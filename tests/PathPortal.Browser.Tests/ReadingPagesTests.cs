@@ -1,5 +1,6 @@
 using Microsoft.Playwright;
 using PathPortal.Browser.Tests.Support;
+using PathPortal.Portal.Domain.People;
 using PathPortal.Web.Tests.Support;
 
 namespace PathPortal.Browser.Tests;
@@ -18,8 +19,23 @@ public sealed class ReadingPagesTests(Chromium chromium, BrowserSite site) : ICl
         await HoldAsync(page, "fleet");
         foreach (var (path, name) in new[]
         {
-            ("/programs", "programs"), ($"/programs/{company.Sealing.Id}", "program"), ("/nothing/here", "not-found"),
+            ("/programs", "programs"), ($"/programs/{company.Sealing.Id}", "program"), ($"/reviews/{company.InReview.Id}", "review"),
+            ($"/reviews/{company.FailingReview.Id}", "review-failing"), ("/history", "history"), ("/setup", "setup"), ("/nothing/here", "not-found"),
         })
+        {
+            await page.GotoAsync(path);
+            await HoldAsync(page, name);
+        }
+    }
+
+    [Fact]
+    public async Task Pages_FormsOfAuthorAndAdministrator_AreReadableAndAccessible()
+    {
+        var plant = await site.People.PlantAsync("Quay works");
+        await site.People.AccountAsync("admin@plant.example", "Ines Administrator", administersCompany: true, (plant, Role.Author));
+        var page = await site.SignInAsync(chromium, "admin@plant.example");
+        await HoldAsync(page, "fleet-administrator");
+        foreach (var (path, name) in new[] { ("/setup/people", "people"), ("/programs/new", "program-new") })
         {
             await page.GotoAsync(path);
             await HoldAsync(page, name);

@@ -17,8 +17,6 @@ public static class SignInSetup
             .AddSignInManager()
             .AddClaimsPrincipalFactory<AccountPrincipalFactory>();
         services.AddAuthentication(IdentityConstants.ApplicationScheme).AddIdentityCookies(cookies => cookies.ApplicationCookie!.Configure(ConfigureCookie));
-        // A disabled account or a changed password ends open sessions at the next request; handlers read the account again in any case.
-        services.Configure<SecurityStampValidatorOptions>(options => options.ValidationInterval = TimeSpan.Zero);
         services.AddAuthorizationBuilder().SetFallbackPolicy(new AuthorizationPolicyBuilder().RequireAuthenticatedUser().Build());
         return services;
     }
@@ -34,10 +32,22 @@ public static class SignInSetup
         options.LoginPath = "/sign-in";
         options.AccessDeniedPath = "/access-denied";
         options.ReturnUrlParameter = "returnUrl";
-        options.Events.OnValidatePrincipal = context =>
-            // Files and the error page itself must not need the database.
-            NeedsNoAccount(context.HttpContext) ? Task.CompletedTask : SecurityStampValidator.ValidatePrincipalAsync(context);
+        options.Events.OnValidatePrincipal = ValidateAsync;
     }
+
+    // A disabled account or a changed password ends open sessions at the next request, not after some minutes; handlers read the account again in any case.
+    private static async Task ValidateAsync(CookieValidatePrincipalContext context)
+    {
+        if (NeedsNoAccount(context.HttpContext))
+            return;
+        var signIn = context.HttpContext.RequestServices.GetRequiredService<SignInManager<Account>>();
+        if (await signIn.ValidateSecurityStampAsync(context.Principal) is { DisabledAt: null })
+            return;
+        context.RejectPrincipal();
+        await signIn.SignOutAsync();
+    }
+
+    // Files and the error page itself must not need the database.
 
     private static bool NeedsNoAccount(HttpContext context) =>
         context.Features.Get<IExceptionHandlerFeature>() is not null

@@ -1,10 +1,11 @@
+using PathPortal.Engine;
 using PathPortal.Engine.Verdicts;
-using PathPortal.Portal.Data;
 using PathPortal.Portal.Domain.Fleet;
 using PathPortal.Portal.Domain.People;
 using PathPortal.Portal.Domain.Programs;
 using PathPortal.Portal.Domain.Reviews;
 using PathPortal.Portal.Domain.Runs;
+using PathPortal.Portal.Simulation;
 
 namespace PathPortal.Web.Tests.Support;
 
@@ -22,6 +23,13 @@ public sealed class SampleCompany
     public Account Author { get; private set; } = null!;
     public Account Owner { get; private set; } = null!;
     public Account Stranger { get; private set; } = null!;
+    public Account Lead { get; private set; } = null!;
+
+    /// <summary>Submitted by the lead, whose role may also approve.</summary>
+    public Review LeadsReview { get; private set; } = null!;
+
+    /// <summary>In review although its run fails.</summary>
+    public Review FailingReview { get; private set; } = null!;
     public PathProgram Sealing { get; private set; } = null!;
     public Review InReview { get; private set; } = null!;
 
@@ -38,6 +46,7 @@ public sealed class SampleCompany
         Hill = await _people.PlantAsync("Hill works", approvals: 2);
         Author = await _people.AccountAsync("author@plant.example", "Ada Author", (Harbour, Role.Author), (Hill, Role.Author));
         Owner = await _people.AccountAsync("owner@plant.example", "Owen Owner", (Harbour, Role.CellOwner), (Hill, Role.CellOwner));
+        Lead = await _people.AccountAsync("lead@plant.example", "Lena Lead", (Harbour, Role.Lead), (Hill, Role.Lead));
         var elsewhere = await _people.PlantAsync("Elsewhere");
         Stranger = await _people.AccountAsync("stranger@plant.example", "Sam Stranger", (elsewhere, Role.Lead));
 
@@ -72,7 +81,12 @@ public sealed class SampleCompany
 
         InReview = new Review(Harbour.Id, second.Id, assignments[0].Id, At);
         InReview.Submit(Author.Id, 1, "Same speed as before except in the corner.", At.AddHours(1));
-        await _people.SaveAsync([InReview, .. InReview.Transitions]);
+        LeadsReview = new Review(Harbour.Id, second.Id, assignments[1].Id, At);
+        LeadsReview.Submit(Lead.Id, 1, "", At.AddHours(2));
+        FailingReview = new Review(Hill.Id, second.Id, assignments[2].Id, At);
+        FailingReview.Submit(Author.Id, 1, "To be seen, not to be approved.", At.AddHours(3));
+        foreach (var review in new[] { InReview, LeadsReview, FailingReview })
+            await _people.SaveAsync([review, .. review.Transitions]);
     }
 
     private PathProgram Program(Plant plant, Part part, string name, string process, CriteriaSheetRecord sheet) =>
@@ -88,7 +102,7 @@ public sealed class SampleCompany
     {
         var run = NewRun(plant);
         run.Start("worker", At);
-        run.Complete(new RunConclusion(verdict, use, criterion, 23.6, "{}", null), At.AddSeconds(2));
+        run.Complete(new RunConclusion(verdict, use, criterion, 23.6, RunSummaryJson.Write(Summary(verdict, use, criterion)), null), At.AddSeconds(2));
         await _people.SaveAsync(run, new RunRequest(run, null, revision.Id, assignment.Id, setup.Id, sheet.Id, Author.Id, At.AddMinutes(_digests)));
     }
 
@@ -99,6 +113,47 @@ public sealed class SampleCompany
         run.Advance(0.4);
         await _people.SaveAsync(run, new RunRequest(run, null, revision.Id, assignment.Id, setup.Id, sheet.Id, Author.Id, At));
     }
+
+    private static RunSummary Summary(Verdict verdict, double? use, Criterion? worst)
+    {
+        var judged = new[] { Criterion.AcrossPath, Criterion.JointPosition, Criterion.JointSpeed, Criterion.Singularity };
+        return new RunSummary
+        {
+            NumericsVersion = 1,
+            Verdict = verdict,
+            Outcomes =
+            [
+                .. judged.Select((c, i) => OutcomeOf(c, use is null ? null : c == worst ? use : 0.2 + (0.15 * i))),
+                new CriterionOutcome { Criterion = Criterion.Finished, Status = CriterionStatus.Pass, Binding = true, NearThreshold = 0.8 },
+            ],
+            Findings = [],
+            Postures = [],
+            PostureChoice = "The only posture.",
+            SampleCount = 5901,
+            Period = 0.004,
+            CycleTime = 23.6,
+            PlannedTime = 21.4,
+            PathLength = 3.482,
+            CharacteristicLength = 1,
+            Extremes = new RunExtremes(),
+            Remarks = [],
+        };
+    }
+
+    private static CriterionOutcome OutcomeOf(Criterion criterion, double? use) => new()
+    {
+        Criterion = criterion,
+        Binding = criterion != Criterion.Singularity,
+        Status = use switch { null => CriterionStatus.NotAssessable, > 1 => CriterionStatus.Fail, >= 0.8 => CriterionStatus.Near, _ => CriterionStatus.Pass },
+        WorstUse = use,
+        Place = use is null ? null : new Place(2210, 8.84, 0.37, 641),
+        Joint = criterion is Criterion.JointPosition or Criterion.JointSpeed ? 4 : null,
+        Value = use * 0.001,
+        LimitValue = use is null ? null : 0.001,
+        Unit = criterion == Criterion.JointSpeed ? "rad/s" : criterion == Criterion.JointPosition ? "rad" : criterion == Criterion.Singularity ? "1" : "m",
+        Reason = use is null ? "The path has no process section." : null,
+        NearThreshold = 0.8,
+    };
 
     private Run NewRun(Guid plant) => new(plant, Portal.Domain.Sha256Text.Of($"sample {++_digests}"), 1, At);
 }

@@ -1,4 +1,5 @@
-using Microsoft.AspNetCore.WebUtilities;
+using System.Globalization;
+using Microsoft.AspNetCore.Http.HttpResults;
 using PathPortal.Portal.Data.Queries;
 using PathPortal.Portal.Domain;
 using PathPortal.Portal.Domain.Programs;
@@ -24,26 +25,32 @@ public static class FileEndpoints
         ? Results.File(file.Value.Bytes, "application/octet-stream", file.Value.FileName)
         : Results.StatusCode(file.Refusal.Kind == RefusalKind.NotAllowed ? StatusCodes.Status403Forbidden : StatusCodes.Status404NotFound);
 
-    private static async Task<IResult> AttachAsync(HttpContext context, Guid id, AttachControllerFile attach, CancellationToken cancellation)
+    private static async Task<IResult> AttachAsync(
+        HttpContext context, Guid id, AttachControllerFile attach, ProgramQuery programs, CancellationToken cancellation)
     {
         var form = await StreamedForm.ReadAsync(context, ControllerFile.MaxBytes, cancellation);
         if (form.Refused is { } status)
             return Results.StatusCode(status);
-        if (!Guid.TryParse(form.Field("revision"), out var revision) || !Guid.TryParse(form.Field("cell"), out var cell) || !int.TryParse(form.Field("number"), out var number))
+        if (!int.TryParse(form.Field("revision"), CultureInfo.InvariantCulture, out var number) || !Guid.TryParse(form.Field("cell"), out var cellId))
             return Results.StatusCode(StatusCodes.Status400BadRequest);
-        var done = await attach.HandleAsync(CurrentActor.Of(context.User), revision, cell, form.FileName, form.File, cancellation);
-        if (done.Succeeded)
-            return Results.LocalRedirect($"/programs/{id}?revision={number}");
-        return done.Refusal.Kind switch
-        {
-            RefusalKind.NotFound => Results.StatusCode(StatusCodes.Status404NotFound),
-            RefusalKind.NotAllowed => Results.StatusCode(StatusCodes.Status403Forbidden),
-            _ => Results.LocalRedirect(QueryHelpers.AddQueryString($"/programs/{id}/attach", new Dictionary<string, string?>
+        var actor = CurrentActor.Of(context.User);
+        var program = await programs.ReadAsync(actor, id, cancellation);
+        if (!program.Succeeded)
+            return Results.StatusCode(program.Refusal.Kind == RefusalKind.NotAllowed ? StatusCodes.Status403Forbidden : StatusCodes.Status404NotFound);
+        var revision = program.Value.Revisions.FirstOrDefault(r => r.Number == number);
+        var cell = program.Value.Assignments.FirstOrDefault(a => a.CellId == cellId && a.RetiredAt is null);
+        if (revision is null || cell is null)
+            return Results.StatusCode(StatusCodes.Status404NotFound);
+        var done = await attach.HandleAsync(actor, revision.Id, cellId, form.FileName, form.File, cancellation);
+        return done.Succeeded
+            ? Results.LocalRedirect($"/programs/{id}?revision={number}")
+            : new RazorComponentResult<AttachDocument>(new Dictionary<string, object?>
             {
-                ["revision"] = form.Field("number"),
-                ["cell"] = form.Field("cell"),
-                ["problem"] = done.Refusal.Message,
-            })),
-        };
+                [nameof(AttachDocument.Program)] = program.Value,
+                [nameof(AttachDocument.Revision)] = revision,
+                [nameof(AttachDocument.Cell)] = cell,
+                [nameof(AttachDocument.Refusal)] = done.Refusal,
+            })
+            { StatusCode = done.Refusal.Kind == RefusalKind.NotAllowed ? StatusCodes.Status403Forbidden : StatusCodes.Status422UnprocessableEntity };
     }
 }
