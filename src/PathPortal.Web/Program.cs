@@ -1,5 +1,4 @@
 using Microsoft.AspNetCore.ResponseCompression;
-using MudBlazor.Services;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Data.Queries;
 using PathPortal.Portal.Handling;
@@ -19,7 +18,6 @@ services.AddSingleton(TimeProvider.System);
 services.AddHttpContextAccessor();
 services.AddRazorComponents().AddInteractiveServerComponents();
 services.AddCascadingAuthenticationState();
-services.AddMudServices();
 services.AddAntiforgery(options => options.Cookie.SecurePolicy = CookieSecurePolicy.SameAsRequest);
 services.AddPortalKeys(builder.Configuration);
 services.AddPortalRateLimits(builder.Configuration);
