@@ -1,6 +1,9 @@
 using Microsoft.EntityFrameworkCore;
+using Microsoft.Extensions.DependencyInjection;
 using PathPortal.Portal.Data;
 using PathPortal.Portal.Demo;
+using PathPortal.Portal.Handling;
+using PathPortal.Portal.Jobs;
 using PathPortal.Portal.Tests.Support;
 using PathPortal.TestSupport;
 
@@ -12,16 +15,15 @@ public sealed class DemoLoaderTests
     public async Task Load_Twice_ChangesNothingTheSecondTime()
     {
         await using var database = await TestDatabase.CreateAsync();
-        await using var source = PortalData.OpenDataSource(database.Owner);
-        var db = new PortalDb(PortalData.OptionsFor(source), TimeProvider.System);
+        await using var services = Services(database);
         var folder = Directory.CreateTempSubdirectory("pathportal-demo-");
         try
         {
             var file = Path.Combine(folder.FullName, "passwords");
-            await new DemoLoader(db, PortalData.CreateHasher()).LoadAsync(file, TestContext.Current.CancellationToken);
+            await LoadAsync(services, file);
             var (text, rows) = (await File.ReadAllTextAsync(file, TestContext.Current.CancellationToken), await RowsAsync(database));
 
-            await new DemoLoader(db, PortalData.CreateHasher()).LoadAsync(file, TestContext.Current.CancellationToken);
+            await LoadAsync(services, file);
 
             Assert.Equal(text, await File.ReadAllTextAsync(file, TestContext.Current.CancellationToken));
             Assert.Equal(rows, await RowsAsync(database));
@@ -38,17 +40,16 @@ public sealed class DemoLoaderTests
     public async Task Load_PasswordsFileLost_GivesPasswordsThatWork()
     {
         await using var database = await TestDatabase.CreateAsync();
-        await using var source = PortalData.OpenDataSource(database.Owner);
-        var db = new PortalDb(PortalData.OptionsFor(source), TimeProvider.System);
+        await using var services = Services(database);
+        var db = services.GetRequiredService<PortalDb>();
         var folder = Directory.CreateTempSubdirectory("pathportal-demo-");
         try
         {
             var file = Path.Combine(folder.FullName, "passwords");
-            var loader = new DemoLoader(db, PortalData.CreateHasher());
-            await loader.LoadAsync(file, TestContext.Current.CancellationToken);
+            await LoadAsync(services, file);
             File.Delete(file);
 
-            await loader.LoadAsync(file, TestContext.Current.CancellationToken);
+            await LoadAsync(services, file);
 
             var line = (await File.ReadAllLinesAsync(file, TestContext.Current.CancellationToken)).First(l => !l.StartsWith('#'))
                 .Split(' ', StringSplitOptions.RemoveEmptyEntries);
@@ -63,7 +64,16 @@ public sealed class DemoLoaderTests
         }
     }
 
+    private static ServiceProvider Services(TestDatabase database) => new ServiceCollection()
+        .AddLogging().AddPortalData(database.Owner).AddRunQueue().AddPortalHandlers().AddDemo().BuildServiceProvider();
+
+    private static async Task LoadAsync(ServiceProvider services, string file)
+    {
+        await using var scope = services.CreateAsyncScope();
+        await scope.ServiceProvider.GetRequiredService<DemoLoader>().LoadAsync(file, TestContext.Current.CancellationToken);
+    }
+
     private static async Task<object?> RowsAsync(TestDatabase database) => await PlantScene.SqlAsync(
         database.Superuser,
-        "SELECT concat_ws(' ', (SELECT count(*) FROM accounts), (SELECT count(*) FROM plant_roles), (SELECT count(*) FROM history), (SELECT md5(string_agg(password_hash, '' ORDER BY id)) FROM accounts))");
+        "SELECT concat_ws(' ', (SELECT count(*) FROM accounts), (SELECT count(*) FROM plant_roles), (SELECT count(*) FROM history), (SELECT count(*) FROM revisions), (SELECT count(*) FROM runs), (SELECT md5(string_agg(password_hash, '' ORDER BY id)) FROM accounts))");
 }
