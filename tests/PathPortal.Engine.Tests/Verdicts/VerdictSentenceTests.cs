@@ -9,7 +9,11 @@ public sealed class VerdictSentenceTests
     {
         var outcome = Base(Criterion.JointSpeed, CriterionStatus.Fail, 1.31) with
         {
-            Place = new Place(3580, 14.32, 0.6249, 11), Joint = 3, Value = 2.62, LimitValue = 2, Unit = "rad/s",
+            Place = new Place(3580, 14.32, 0.6249, 11),
+            Joint = 3,
+            Value = 2.62,
+            LimitValue = 2,
+            Unit = "rad/s",
         };
 
         Assert.Equal(

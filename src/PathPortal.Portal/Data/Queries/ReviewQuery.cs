@@ -33,8 +33,18 @@ public sealed class ReviewQuery(PortalDb db)
         var decisions = await data.Decisions.Where(d => d.ReviewId == reviewId).OrderBy(d => d.DecidedAt)
             .Select(d => new
             {
-                d.Kind, d.Round, d.DecidedBy, d.DecidedAt, d.Meaning, d.Reason, d.RevisionSha256, d.SetupSha256, d.CriteriaSha256, d.RunDigest,
-                d.ControllerFileSha256, By = data.Users.Where(u => u.Id == d.DecidedBy).Select(u => u.DisplayName).First(),
+                d.Kind,
+                d.Round,
+                d.DecidedBy,
+                d.DecidedAt,
+                d.Meaning,
+                d.Reason,
+                d.RevisionSha256,
+                d.SetupSha256,
+                d.CriteriaSha256,
+                d.RunDigest,
+                d.ControllerFileSha256,
+                By = data.Users.Where(u => u.Id == d.DecidedBy).Select(u => u.DisplayName).First(),
             }).ToListAsync(cancellation);
         var uploadedBy = await data.Revisions.Where(r => r.Id == review.RevisionId).Select(r => r.UploadedBy).SingleAsync(cancellation);
         var decidedAlready = decisions.Exists(d => d.Round == review.Round && d.DecidedBy == access.AccountId);

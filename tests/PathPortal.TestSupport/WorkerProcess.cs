@@ -1,12 +1,11 @@
 using System.Collections.Concurrent;
 using System.Diagnostics;
 using System.Globalization;
-using PathPortal.TestSupport;
 
-namespace PathPortal.Portal.Tests.Jobs;
+namespace PathPortal.TestSupport;
 
 /// <summary>A real worker process that can be killed, frozen and asked to end.</summary>
-internal sealed class WorkerProcess : IDisposable
+public sealed class WorkerProcess : IDisposable
 {
     private readonly Process _process;
     private readonly ConcurrentQueue<string> _log = new();
