@@ -28,4 +28,6 @@ builder.Services.AddRunWorker(options);
 builder.Services.Configure<HostOptions>(host => host.ShutdownTimeout = options.StopPatience + TimeSpan.FromSeconds(5));
 
 await builder.Build().RunAsync();
+// Everything was given its time to end. Threads of the job engine that still try to reach a database that is gone must not keep the process.
+Environment.Exit(0);
 return 0;
