@@ -28,6 +28,20 @@ public sealed class Installation : IDisposable
     /// <summary>The commands of all processes that belong to this installation, by their arguments or their working folder.</summary>
     public IReadOnlyList<string> Processes() => [.. Directory.GetDirectories("/proc").Select(Describe).OfType<string>()];
 
+    /// <summary>What is still there after at most that long.</summary>
+    public async Task<IReadOnlyList<string>> ProcessesAfterAsync(TimeSpan patience, CancellationToken cancellation)
+    {
+        var start = TimeProvider.System.GetTimestamp();
+        using var look = new PeriodicTimer(TimeSpan.FromMilliseconds(200));
+        while (Processes() is { Count: > 0 } left)
+        {
+            if (TimeProvider.System.GetElapsedTime(start) > patience)
+                return left;
+            await look.WaitForNextTickAsync(cancellation);
+        }
+        return [];
+    }
+
     public void Dispose() => Directory.Delete(DataFolder, recursive: true);
 
     private string? Describe(string process)

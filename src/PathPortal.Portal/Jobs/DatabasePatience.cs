@@ -38,7 +38,7 @@ internal sealed partial class DatabasePatience(TimeProvider clock, ILogger<Datab
         {
             if (inner is DbException { IsTransient: true } or TimeoutException)
                 return true;
-            // Connection exceptions, too many connections, shutdown of the server or of this session, crash, still starting.
+            // Connection exceptions, too many connections, shutdown of the server or of the connection, crash, still starting.
             if (inner is DbException { SqlState: { } state } && (state.StartsWith("08", StringComparison.Ordinal) || state is "53300" or "57P01" or "57P02" or "57P03"))
                 return true;
         }
