@@ -41,7 +41,7 @@ public sealed class RunReportHost : IAsyncDisposable
         });
         builder.WebHost.UseStaticWebAssets();
         builder.WebHost.UseUrls("http://127.0.0.1:0");
-        builder.Logging.SetMinimumLevel(LogLevel.Warning);
+        builder.Logging.ClearProviders();
         builder.Services.AddSingleton(TimeProvider.System);
         builder.Services.AddHttpContextAccessor();
         builder.Services.AddRazorComponents().AddInteractiveServerComponents();
@@ -66,7 +66,11 @@ public sealed class RunReportHost : IAsyncDisposable
         return new(app, run, view);
     }
 
-    public async ValueTask DisposeAsync() => await _app.DisposeAsync();
+    public async ValueTask DisposeAsync()
+    {
+        await _app.StopAsync();
+        await _app.DisposeAsync();
+    }
 
     private static IResult Bytes(byte[] bytes) => Results.Bytes(bytes, PackedSamples.ContentType);
 
