@@ -6,7 +6,7 @@ namespace PathPortal.Engine;
 /// Every sample of one run as columns of equal length <see cref="Count"/>, SI. Poses are in the work frame W. Joint columns are indexed
 /// [joint][sample]. Recomputed on demand, never stored except with a decision. The arrays are the run's own: read them, don't write them.
 /// </summary>
-public sealed class RunSamples
+public sealed record RunSamples
 {
     private IReadOnlyDictionary<Criterion, double[]> use = new Dictionary<Criterion, double[]>();
 

@@ -47,17 +47,25 @@ public static class Simulator
     private static RunResult Best(
         Scenario scenario, PathPlan plan, StartPostures starts, bool keepSamples, IProgress<double>? progress, CancellationToken cancellation)
     {
-        var runs = new PostureRuns(scenario, plan, new(scenario.Arm, scenario.Cell.ToolInFlange));
-        var outcomes = new List<PostureOutcome>();
+        var finder = new PostureFinder(scenario.Arm, scenario.Cell.ToolInFlange);
+        var runs = new PostureRuns(scenario, plan, finder);
+        var turns = WholeTurns.Of(scenario, plan, [.. starts.Starts.Select(s => s.Joints)]);
+        var outcomes = new PostureOutcome[starts.Starts.Length];
         (PostureRun Run, Judgement Judgement)? best = null;
-        foreach (var run in runs.All([.. starts.Starts.Select(s => s.Joints)], progress, cancellation))
+        foreach (var simulated in runs.All([.. turns.Simulated.Select(i => starts.Starts[i].Joints)], progress, cancellation))
         {
-            var judgement = Judgement.Of(scenario, run.Samples, Facts(scenario, run.Outcome));
-            var start = starts.Starts[run.Index];
-            outcomes.Add(new(start.Joints, start.Description, judgement.Verdict, judgement.WorstUse, judgement.WorstCriterion, Chosen: false));
-            if (best is null || PostureRanking.Instance.Compare(judgement, best.Value.Judgement) < 0)
+            var missed = Reachability.Missed(scenario, plan, finder, simulated.Samples);
+            foreach (var run in turns.Expand(simulated))
             {
-                best = (run, judgement);
+                var judgement = Judgement.Of(scenario, run.Samples, Facts(scenario, run, missed));
+                var start = starts.Starts[run.Index];
+                outcomes[run.Index] = new(
+                    start.Joints, start.Description, judgement.Verdict, judgement.WorstUse, judgement.WorstCriterion, Chosen: false);
+                var order = best is null ? -1 : PostureRanking.Instance.Compare(judgement, best.Value.Judgement);
+                if (order < 0 || (order == 0 && run.Index < best!.Value.Run.Index))
+                {
+                    best = (run, judgement);
+                }
             }
         }
 
@@ -68,7 +76,7 @@ public static class Simulator
     }
 
     private static RunSummary Summary(
-        Scenario scenario, PathPlan plan, StartPostures starts, List<PostureOutcome> postures, PostureRun chosen, Judgement verdict)
+        Scenario scenario, PathPlan plan, StartPostures starts, PostureOutcome[] postures, PostureRun chosen, Judgement verdict)
     {
         var (findings, leftOut) = verdict.Findings();
         return new()
@@ -115,7 +123,7 @@ public static class Simulator
         }
     }
 
-    private static string Choice(Scenario scenario, List<PostureOutcome> postures, int chosen)
+    private static string Choice(Scenario scenario, PostureOutcome[] postures, int chosen)
     {
         if (scenario.Start is not null)
         {
@@ -123,23 +131,24 @@ public static class Simulator
         }
 
         var passing = postures.Count(p => p.Verdict == Verdict.Pass);
-        return postures.Count == 1
+        return postures.Length == 1
             ? $"The only posture that reaches the first waypoint: {postures[0].Description}."
             : string.Create(
                 CultureInfo.InvariantCulture,
-                $"{passing} of {postures.Count} start postures pass; {postures[chosen].Description} has the lowest worst use of a limit.");
+                $"{passing} of {postures.Length} start postures pass; {postures[chosen].Description} has the lowest worst use of a limit.");
     }
 
-    private static RunFacts Facts(Scenario scenario, LaneOutcome outcome)
+    private static RunFacts Facts(Scenario scenario, PostureRun run, string? missed)
     {
         var (sound, reason) = LoopSoundness.Judge(scenario.Controller);
-        var unreachable = outcome.End == RunEnd.Unreachable;
+        var completed = run.Outcome.End == RunEnd.Completed;
+        var unreachable = run.Outcome.End == RunEnd.Unreachable ? run.Outcome.Reason : missed;
         return new()
         {
-            Finished = outcome.End == RunEnd.Completed,
-            NotFinishedReason = outcome.End == RunEnd.Completed ? null : outcome.Reason,
-            Reachable = unreachable ? false : outcome.End == RunEnd.Completed ? true : null,
-            NotReachableReason = unreachable ? outcome.Reason : null,
+            Finished = completed,
+            NotFinishedReason = completed ? null : run.Outcome.Reason,
+            Reachable = unreachable is not null ? false : completed ? true : null,
+            NotReachableReason = unreachable,
             LoopSound = sound,
             NotSoundReason = reason,
         };

@@ -1,1 +1,4 @@
+using PathPortal.Benchmarks;
+
+StepBenchmark.Run(Console.Out);
 return 0;

@@ -40,7 +40,7 @@ internal sealed class ReferenceCursor
         X_BW = scenario.Cell.BaseInCell.Inverse() * scenario.Cell.WorkInCell;
         tolerance = EndTolerance * scenario.Controller.Period;
         lastJoints = start;
-        if (plan.Moves.FirstOrDefault(m => m is not DwellMove) is not ChainMove)
+        if (plan.Moves.FirstOrDefault(m => m is not DwellMove) is JointMove)
         {
             trajectory = JointTrajectory.Hold(start);
         }
@@ -153,6 +153,13 @@ internal sealed class ReferenceCursor
     {
         if (trajectory is null)
         {
+            if (seen.ContainsAnyExceptInRange(double.MinValue, double.MaxValue))
+            {
+                Failure = string.Create(
+                    CultureInfo.InvariantCulture, $"A joint value was not finite before the joint move to waypoint {joint.Waypoint + 1}.");
+                return;
+            }
+
             // The loop is near the last programmed pose, not on it; the move starts from the posture that is.
             var before = scenario.Path.Waypoints[joint.Waypoint - 1];
             if (finder.Continue(PoseOf(before), seen, before.Task) is not { } from)

@@ -42,6 +42,14 @@ internal sealed class ProgrammedTrack(ImmutableArray<Segment?> segments)
         Project(point, lastWaypoint, furthest);
         var here = At(axis);
         var deviation = PathDeviation.Between(point, axis, here.Position, here.Axis);
+        if (at < lastWaypoint && segments[at + 1] is { Length: 0, TurnAngle: > 0 } turn)
+        {
+            // The reference turns on the spot ahead: a tool that turns along is not at fault, even a little before the spot.
+            turnShare = NearestShare(turn, axis, turnShare);
+            var turned = PathDeviation.Between(point, axis, here.Position, AxisOf(turn, turnShare));
+            deviation = deviation with { Axis = Math.Min(deviation.Axis, turned.Axis) };
+        }
+
         var begin = started ? lastPoint : point;
         deviation = deviation.Worse(PassedBy(from, at, begin, point));
         if (isLast)

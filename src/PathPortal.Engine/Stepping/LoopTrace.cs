@@ -57,18 +57,24 @@ internal sealed class LoopTrace(int joints, int width) : IDisposable
 
     private int Channels => Distance + 8;
 
-    private int StepSize => Channels * width;
+    // Chunk by chunk, then channel by channel: writing a step touches each channel once, reading a channel runs straight through memory.
+    private int ChannelSize => StepsInChunk * width;
 
     /// <summary>One number of one lane at one step.</summary>
     public double At(int step, int channel, int lane) =>
-        chunks[step / StepsInChunk][(step % StepsInChunk * Channels + channel) * width + lane];
+        chunks[step / StepsInChunk][channel * ChannelSize + step % StepsInChunk * width + lane];
 
     /// <summary>Copies one channel of one lane.</summary>
     public void Copy(int channel, int lane, Span<double> to)
     {
-        for (var step = 0; step < to.Length; step++)
+        for (var first = 0; first < to.Length; first += StepsInChunk)
         {
-            to[step] = At(step, channel, lane);
+            var from = chunks[first / StepsInChunk].AsSpan(channel * ChannelSize, ChannelSize);
+            var part = to[first..Math.Min(first + StepsInChunk, to.Length)];
+            for (var i = 0; i < part.Length; i++)
+            {
+                part[i] = from[i * width + lane];
+            }
         }
     }
 
@@ -78,10 +84,10 @@ internal sealed class LoopTrace(int joints, int width) : IDisposable
     {
         if (step / StepsInChunk == chunks.Count)
         {
-            chunks.Add(ArrayPool<double>.Shared.Rent(StepsInChunk * StepSize));
+            chunks.Add(ArrayPool<double>.Shared.Rent(Channels * ChannelSize));
         }
 
-        fixed (double* start = &chunks[step / StepsInChunk][step % StepsInChunk * StepSize])
+        fixed (double* start = &chunks[step / StepsInChunk][step % StepsInChunk * width])
         {
             var to = (T*)start;
             to = Put(w.Joints, joints, to);
@@ -91,14 +97,14 @@ internal sealed class LoopTrace(int joints, int width) : IDisposable
             to = Put(w.Echo, EchoCount, to);
             to = Put(w.True.Point, 3, to);
             to = Put(w.True.Rotation, 9, to);
-            to[0] = *w.TrueDistance;
-            to[1] = *w.TrueTurn;
-            to[2] = *w.SigmaMin;
-            to[3] = *w.SigmaMax;
-            to[4] = *w.DampingSquared;
-            to[5] = *w.SpeedScale;
-            to[6] = *w.PathRate;
-            to[7] = *w.ToolSpeed;
+            to = Put(w.TrueDistance, 1, to);
+            to = Put(w.TrueTurn, 1, to);
+            to = Put(w.SigmaMin, 1, to);
+            to = Put(w.SigmaMax, 1, to);
+            to = Put(w.DampingSquared, 1, to);
+            to = Put(w.SpeedScale, 1, to);
+            to = Put(w.PathRate, 1, to);
+            Put(w.ToolSpeed, 1, to);
         }
     }
 
@@ -118,9 +124,9 @@ internal sealed class LoopTrace(int joints, int width) : IDisposable
     {
         for (var i = 0; i < count; i++)
         {
-            to[i] = from[i];
+            to[i * StepsInChunk] = from[i];
         }
 
-        return to + count;
+        return to + count * StepsInChunk;
     }
 }

@@ -12,11 +12,13 @@ internal sealed class SampleReader
     private readonly int lane;
     private readonly int count;
     private readonly RunSamples samples;
+    private readonly double[] referenceTravel;
 
     private SampleReader(Scenario scenario, PathPlan plan, LoopTrace trace, int lane, int count)
     {
         (this.scenario, this.plan, this.trace, this.lane, this.count) = (scenario, plan, trace, lane, count);
         var n = scenario.Arm.Joints.Length;
+        referenceTravel = Column(trace.Echo + LoopTrace.EchoTravel);
         samples = new()
         {
             Count = count,
@@ -60,13 +62,13 @@ internal sealed class SampleReader
     private void ReadToolPoses()
     {
         var X_WB = scenario.Cell.WorkInCell.Inverse() * scenario.Cell.BaseInCell;
+        var point = Columns(trace.ToolPoint, 3);
+        var R = Columns(trace.ToolRotation, 9);
         for (var k = 0; k < count; k++)
         {
-            var rotation = trace.ToolRotation;
-            double R(int i) => trace.At(k, rotation + i, lane);
-            var point = trace.ToolPoint;
-            var p = X_WB * new Vector3D(trace.At(k, point, lane), trace.At(k, point + 1, lane), trace.At(k, point + 2, lane));
-            var R_WT = X_WB.Rotation * new RotationMatrix(R(0), R(1), R(2), R(3), R(4), R(5), R(6), R(7), R(8));
+            var p = X_WB * new Vector3D(point[0][k], point[1][k], point[2][k]);
+            var R_WT = X_WB.Rotation
+                * new RotationMatrix(R[0][k], R[1][k], R[2][k], R[3][k], R[4][k], R[5][k], R[6][k], R[7][k], R[8][k]);
             (samples.ToolPosition[0][k], samples.ToolPosition[1][k], samples.ToolPosition[2][k]) = (p.X, p.Y, p.Z);
             var (w, x, y, z) = Components(R_WT, k);
             (samples.ToolOrientation[0][k], samples.ToolOrientation[1][k]) = (w, x);
@@ -102,7 +104,7 @@ internal sealed class SampleReader
             if (plan.Segments[samples.Waypoint[k]] is null && !IsDwellBeforeSegment(k))
             {
                 byJoints += k == 0 ? 0 : ReferenceStep(k);
-                travel[k] = byJoints + trace.At(k, trace.Echo + LoopTrace.EchoTravel, lane);
+                travel[k] = byJoints + referenceTravel[k];
                 inTool = false;
                 continue;
             }
@@ -139,7 +141,7 @@ internal sealed class SampleReader
         var isLast = k + 1 == count || plan.Segments[samples.Waypoint[k + 1]] is null;
         var point = new Vector3D(samples.ToolPosition[0][k], samples.ToolPosition[1][k], samples.ToolPosition[2][k]);
         var deviation = track.MoveTo(
-            point, ToolAxis(k), Math.Max(1, samples.Waypoint[ahead]), trace.At(ahead, trace.Echo + LoopTrace.EchoTravel, lane), isLast);
+            point, ToolAxis(k), Math.Max(1, samples.Waypoint[ahead]), referenceTravel[ahead], isLast);
         samples.Process[k] = sections.IsOn(track.Waypoint, track.Travel);
         if (samples.Process[k])
         {
