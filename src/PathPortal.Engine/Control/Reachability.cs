@@ -34,16 +34,15 @@ internal static class Reachability
                 continue;
             }
 
-            var finite = true;
+            if (!double.IsFinite(samples.TrackingError[k]))
+            {
+                // The run ended here, for that reason.
+                return null;
+            }
+
             for (var i = 0; i < seed.Length; i++)
             {
                 seed[i] = samples.Joints[i][k];
-                finite &= double.IsFinite(seed[i]);
-            }
-
-            if (!finite)
-            {
-                return null;
             }
 
             solved++;

@@ -4,6 +4,7 @@ using PathPortal.Engine.Arms;
 using PathPortal.Engine.Geometry;
 using PathPortal.Engine.Paths;
 using PathPortal.Engine.Postures;
+using PathPortal.Engine.Stepping;
 
 namespace PathPortal.Engine.Control;
 
@@ -153,10 +154,10 @@ internal sealed class ReferenceCursor
     {
         if (trajectory is null)
         {
-            if (seen.ContainsAnyExceptInRange(double.MinValue, double.MaxValue))
+            if (seen.ContainsAnyExceptInRange(-LaneMath.LargestAngle, LaneMath.LargestAngle))
             {
                 Failure = string.Create(
-                    CultureInfo.InvariantCulture, $"A joint value was not finite before the joint move to waypoint {joint.Waypoint + 1}.");
+                    CultureInfo.InvariantCulture, $"A joint value had run away before the joint move to waypoint {joint.Waypoint + 1}.");
                 return;
             }
 
