@@ -147,7 +147,8 @@ public sealed class LimitReactionTests
             start,
             LoopScenarios.BentTool,
             LoopScenarios.Controller with { LimitsSpeed = true, TimeLaw = TimeLaw.Trapezoidal, Feedforward = Feedforward.Difference },
-            [At(start), At(end) with { Motion = MotionKind.Joint, Joints = end, JointSpeedShare = 0.5 }]) with { Arm = arm };
+            [At(start), At(end) with { Motion = MotionKind.Joint, Joints = end, JointSpeedShare = 0.5 }]) with
+        { Arm = arm };
         var samples = LoopScenarios.Run(scenario);
 
         // The loop ends within its settling bound; a posture given is finished to the programmed pose first.
@@ -210,7 +211,8 @@ public sealed class LimitReactionTests
     private static Scenario Square(LimitReaction reaction) =>
         LoopScenarios.Square(
             LoopScenarios.BentTool, TaskKind.Pose, LoopScenarios.Controller with { LimitsSpeed = true, LimitReaction = reaction, Feedforward = Feedforward.Difference })
-            with { Arm = TestArms.SixJoints(Slow) };
+            with
+        { Arm = TestArms.SixJoints(Slow) };
 
     private static double Fastest(double[][] joints) => joints.Max(j => j.Max(Math.Abs));
 }

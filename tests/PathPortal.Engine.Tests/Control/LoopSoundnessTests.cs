@@ -69,7 +69,8 @@ public sealed class LoopSoundnessTests
     {
         var pose = LoopScenarios.ToolPose(LoopScenarios.SquareStart, LoopScenarios.BentTool);
         var held = LoopScenarios.Point(
-            pose.Translation + new Vector3D(1e-7, 0, 0), UnitQuaternion.FromMatrix(pose.Rotation)) with { Dwell = 2 };
+            pose.Translation + new Vector3D(1e-7, 0, 0), UnitQuaternion.FromMatrix(pose.Rotation)) with
+        { Dwell = 2 };
         var samples = LoopScenarios.Run(LoopScenarios.Scenario(
             LoopScenarios.SquareStart,
             LoopScenarios.BentTool,

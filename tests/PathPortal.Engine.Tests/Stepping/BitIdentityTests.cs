@@ -137,6 +137,7 @@ public sealed class BitIdentityTests
                 At(0.06, 0.05, 0.02) with { Orientation = turned, Dwell = 0.05 },
                 At(0, 0, -0.05) with { Motion = MotionKind.Joint, JointSpeedShare = 0.8 },
                 At(0.02, 0, -0.05) with { Task = name == "free turn" ? TaskKind.Point : TaskKind.Pose },
-            ]) with { Arm = TestArms.SixJoints(Limits) };
+            ]) with
+        { Arm = TestArms.SixJoints(Limits) };
     }
 }
