@@ -15,6 +15,17 @@ internal static class RunWaits
 
     private static CancellationToken Cancellation => TestContext.Current.CancellationToken;
 
+    /// <summary>So that how long a process takes to start is not counted with what comes after.</summary>
+    public static Task PresentAsync(JobScene scene, long workers) => Eventually.TrueAsync(
+        "so many workers are present", Patience, async () => workers == (long)(await scene.SqlAsync("SELECT count(*) FROM workers"))!, Cancellation);
+
+    /// <summary>Which of two workers computes the run, and which does not.</summary>
+    public static async Task<(WorkerProcess Holder, WorkerProcess Other)> HolderAsync(JobScene scene, Guid run, WorkerProcess one, WorkerProcess another)
+    {
+        await UnderWayAsync(scene, one, run);
+        return (await scene.RunAsync(run)).WorkerName!.Contains(one.NamePart, StringComparison.Ordinal) ? (one, another) : (another, one);
+    }
+
     public static async Task UnderWayAsync(JobScene scene, WorkerProcess worker, Guid run) =>
         await Eventually.TrueAsync(
             "the run is under way\n" + worker.Log, Patience,

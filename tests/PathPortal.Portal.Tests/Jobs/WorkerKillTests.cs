@@ -13,15 +13,16 @@ public sealed class WorkerKillTests(ITestOutputHelper output)
     public async Task Worker_KilledInMidRun_IsReplacedByTheOther()
     {
         await using var scene = await JobScene.CreateAsync();
-        using var first = WorkerProcess.Start(scene.Database!.Worker);
+        using var one = WorkerProcess.Start(scene.Database!.Worker);
+        using var another = WorkerProcess.Start(scene.Database.Worker);
+        await PresentAsync(scene, 2);
         var run = (await scene.UploadAsync(JobScene.Path(1, LongPath), cells: 1))[0];
-        await UnderWayAsync(scene, first, run);
-        using var second = WorkerProcess.Start(scene.Database.Worker);
+        var (first, second) = await HolderAsync(scene, run, one, another);
 
         first.KillAtOnce();
         var killed = TimeProvider.System.GetTimestamp();
         await Eventually.TrueAsync(
-            "the other worker has the run\n" + second.Log, Patience,
+            "the other worker has the run", Patience,
             async () => (await scene.RunAsync(run)).WorkerName?.Contains(second.NamePart, StringComparison.Ordinal) == true, Cancellation);
         output.WriteLine($"The other worker took the run over after {TimeProvider.System.GetElapsedTime(killed).TotalSeconds:F1} s.");
         var done = await FinishedAsync(scene, second, run);
