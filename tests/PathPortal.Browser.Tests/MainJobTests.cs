@@ -12,18 +12,19 @@ namespace PathPortal.Browser.Tests;
 
 /// <summary>
 /// The job the portal is for, in a real browser, on a real database, with a real worker process: one account uploads a path and submits it,
-/// the verdict comes from the worker. That another account approves is tested over HTTP.
+/// the verdict comes from the worker, another account approves. Takes the picture README shows.
 /// </summary>
 public sealed class MainJobTests(Chromium chromium, BrowserSite site) : IClassFixture<BrowserSite>
 {
     private const string Author = "asta@demo.example";
+    private const string Approver = "doran@demo.example";
     private const string Program = "Door frame seal bead";
 
     // Far beyond what the runs of an upload take, also behind those of the demo; the bound only ends a test that would hang.
     private const int Patience = 300_000;
 
     [Fact]
-    public async Task Upload_ByAnAuthor_IsSimulatedAndSubmitted()
+    public async Task Upload_ByAnAuthor_IsSimulatedSubmittedAndApprovedByAnother()
     {
         var passwords = await LoadDemoAsync();
         using var worker = WorkerProcess.Start(site.Site.Database.Worker);
@@ -50,6 +51,24 @@ public sealed class MainJobTests(Chromium chromium, BrowserSite site) : IClassFi
         // The author sees the review but has nothing to sign.
         await Assertions.Expect(author.GetByLabel("Your password, again")).Not.ToBeVisibleAsync();
         await Screens.TakeAsync(author, "main-job-author");
+
+        var approver = await SignInAsync(Approver, passwords);
+        await approver.GotoAsync(new Uri(author.Url).AbsolutePath);
+        await SignAsync(approver, "not-the-password");
+        await Assertions.Expect(approver.GetByText("The password was not accepted")).ToBeVisibleAsync();
+        await SignAsync(approver, passwords[Approver]);
+        await Assertions.Expect(approver.Locator(".page-head").GetByText("approved")).ToBeVisibleAsync();
+        await Screens.TakeAsync(approver, "main-job-approved");
+        await Accessibility.AssertNoFindingsAsync(approver);
+
+        await PictureForReadmeAsync(passwords);
+    }
+
+    private static async Task SignAsync(IPage page, string password)
+    {
+        await page.GetByRole(AriaRole.Radio, new() { Name = "Approve." }).CheckAsync();
+        await page.GetByLabel("Your password, again").FillAsync(password);
+        await page.GetByRole(AriaRole.Button, new() { Name = "Sign", Exact = true }).ClickAsync();
     }
 
     private static async Task RefuseBrokenFileAsync(IPage page)
@@ -72,6 +91,20 @@ public sealed class MainJobTests(Chromium chromium, BrowserSite site) : IClassFi
     {
         await page.GetByLabel("File", new() { Exact = true }).SetInputFilesAsync(new FilePayload { Name = name, MimeType = "text/csv", Buffer = bytes });
         await page.GetByRole(AriaRole.Button, new() { Name = "Upload and simulate" }).ClickAsync();
+    }
+
+    /// <summary>The run that fails on Seal 4, as the lead engineer sees it.</summary>
+    private async Task PictureForReadmeAsync(IReadOnlyDictionary<string, string> passwords)
+    {
+        var lead = await SignInAsync("fenja@demo.example", passwords);
+        await lead.GetByRole(AriaRole.Link, new() { Name = Program }).First.ClickAsync();
+        await lead.GetByRole(AriaRole.Link, new() { Name = "2", Exact = true }).First.ClickAsync();
+        var row = lead.Locator("tr", new() { Has = lead.GetByRole(AriaRole.Link, new() { Name = "Seal 4", Exact = true }) }).First;
+        await Assertions.Expect(row.GetByText("fails")).ToBeVisibleAsync(new() { Timeout = Patience });
+        await row.Locator("a[href^='/runs/']").First.ClickAsync();
+        await Assertions.Expect(lead.GetByText("Joint speed asked for")).ToBeVisibleAsync();
+        await lead.WaitForLoadStateAsync(LoadState.NetworkIdle);
+        await Screens.TakeAsync(lead, "run-page", fullPage: false);
     }
 
     private async Task<IPage> SignInAsync(string email, IReadOnlyDictionary<string, string> passwords)
